@@ -1,0 +1,131 @@
+import { z } from 'zod';
+import { defineEndpoint } from '#shared/contracts/endpoint';
+import { emailSchema } from '#shared/contracts/accounts';
+import { RELATIONS } from '#shared/contracts/permissions';
+import { MAX_TITLE, studyDocumentSchema } from '#shared/study/study.document';
+
+export const studyIdSchema = z.string().regex(/^[A-Za-z0-9_-]{16,36}$/, 'this is not a study');
+const studyParams = z.object({ studyId: studyIdSchema });
+/** Made by the client for each intended change: sent twice, it is done once. */
+const requestKeySchema = z.uuid();
+const nothing = z.object({});
+const timeSchema = z.iso.datetime();
+
+/** A study as somebody may see it. `number` is the number of its newest save. */
+export const studySchema = z.object({
+  id: z.string(),
+  number: z.number().int(),
+  document: studyDocumentSchema,
+  relation: z.enum(RELATIONS).exclude(['stranger']),
+  ownerName: z.string(),
+  savedAt: timeSchema,
+});
+export type Study = z.infer<typeof studySchema>;
+
+/** A row of the table: the document itself is small enough to draw its chords' profiles from. */
+export const studyRowSchema = studySchema;
+export type StudyRow = z.infer<typeof studyRowSchema>;
+
+export const listStudies = defineEndpoint({
+  method: 'GET',
+  path: '/api/studies',
+  query: z.strictObject({
+    /** From the previous page's `next`. */
+    after: z.string().max(120).optional(),
+    limit: z.coerce.number().int().min(1).max(50).default(20),
+  }),
+  response: z.object({ studies: z.array(studyRowSchema), next: z.string().nullable() }),
+});
+
+export const createStudy = defineEndpoint({
+  method: 'POST',
+  path: '/api/studies',
+  body: z.strictObject({ document: studyDocumentSchema, requestKey: requestKeySchema }),
+  response: studySchema,
+});
+
+export const readStudy = defineEndpoint({
+  method: 'GET',
+  path: '/api/studies/:studyId',
+  params: studyParams,
+  response: studySchema,
+});
+
+/** A save names the number it began from. A stale one is set aside, answered 409 `study.stale` with {@link staleDetailsSchema}. */
+export const saveStudy = defineEndpoint({
+  method: 'PUT',
+  path: '/api/studies/:studyId',
+  params: studyParams,
+  body: z.strictObject({
+    document: studyDocumentSchema,
+    basedOn: z.number().int().min(1),
+    requestKey: requestKeySchema,
+  }),
+  response: studySchema,
+});
+
+/** What stands beside what: the newest save, and the one just refused, which is kept under its own number. */
+export const staleDetailsSchema = z.object({
+  newest: studySchema.extend({ savedByName: z.string() }),
+  setAsideNumber: z.number().int(),
+});
+export type StaleDetails = z.infer<typeof staleDetailsSchema>;
+
+export const renameStudy = defineEndpoint({
+  method: 'PATCH',
+  path: '/api/studies/:studyId',
+  params: studyParams,
+  body: z.strictObject({
+    title: z.string().trim().min(1, 'a study needs a title').max(MAX_TITLE),
+    basedOn: z.number().int().min(1),
+    requestKey: requestKeySchema,
+  }),
+  response: studySchema,
+});
+
+export const deleteStudy = defineEndpoint({
+  method: 'DELETE',
+  path: '/api/studies/:studyId',
+  params: studyParams,
+  response: nothing,
+});
+
+/** Undoes a deletion. */
+export const restoreStudy = defineEndpoint({
+  method: 'POST',
+  path: '/api/studies/:studyId/restorations',
+  params: studyParams,
+  response: studySchema,
+});
+
+export const SHARE_RIGHTS = ['view', 'comment'] as const;
+export const shareSchema = z.object({
+  id: z.string(),
+  email: z.string(),
+  may: z.enum(SHARE_RIGHTS),
+  sharedAt: timeSchema,
+});
+export type Share = z.infer<typeof shareSchema>;
+
+export const listShares = defineEndpoint({
+  method: 'GET',
+  path: '/api/studies/:studyId/shares',
+  params: studyParams,
+  response: z.object({ shares: z.array(shareSchema) }),
+});
+
+/** Shares with an address, known or not: its owner sees the study once they have an account. Sharing again changes the right. */
+export const createShare = defineEndpoint({
+  method: 'POST',
+  path: '/api/studies/:studyId/shares',
+  params: studyParams,
+  body: z.strictObject({ email: emailSchema, may: z.enum(SHARE_RIGHTS) }),
+  response: shareSchema,
+});
+
+export const deleteShare = defineEndpoint({
+  method: 'DELETE',
+  path: '/api/studies/:studyId/shares/:shareId',
+  params: studyParams.extend({ shareId: z.string().max(36) }),
+  response: nothing,
+});

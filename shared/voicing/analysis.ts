@@ -1,0 +1,100 @@
+import type { Section } from '#shared/strings/sections';
+import type { Chord, Dynamic, Ensemble, Intonation, Technique } from '#shared/study/study.document';
+import type { Decibels, Hertz, Midi, Semitones } from '#shared/units';
+import type { Register } from '#shared/voicing/registers';
+
+/** What the sound of a chord depends on besides its voices. */
+export interface SoundSettings {
+  readonly a4Hz: Hertz;
+  readonly intonation: Intonation;
+  readonly ensemble: Ensemble;
+  readonly key: { readonly tonic: string };
+}
+
+/** One partial of one voice. 0 dB is the level of one player's loudest partial at mf before the body. */
+export interface Partial {
+  /** Its number in the series, 1 the fundamental. */
+  readonly n: number;
+  readonly frequencyHz: Hertz;
+  readonly levelDb: Decibels;
+}
+
+/** One voice made to sound. */
+export interface VoiceSound {
+  readonly id: string;
+  readonly section: Section;
+  readonly pitch: string;
+  readonly midi: Midi;
+  readonly players: number;
+  readonly technique: Technique;
+  readonly dynamic: Dynamic;
+  readonly partials: readonly Partial[];
+}
+
+/** The clouding of one register: its index and where in it that is reached. */
+export interface RegisterMuddiness {
+  readonly register: Register;
+  /** 0 … 100; 50 stands at the published low interval limits. */
+  readonly index: number;
+  /** The place on the pitch axis to which the index belongs; null where the index is 0. */
+  readonly at: Midi | null;
+}
+
+/** A pair of notes that stands under its low interval limit. */
+export interface LimitFinding {
+  readonly lowerId: string;
+  readonly upperId: string;
+  /** The chart's name of the interval: `M3`. */
+  readonly interval: string;
+  /** The lowest lower note that the chart allows, e.g. `Bb2`. */
+  readonly limit: string;
+  readonly semitonesBelow: Semitones;
+}
+
+/** Two partials of different voices and their part in the clouding. */
+export interface PartialMeeting {
+  readonly lowerN: number;
+  readonly upperN: number;
+  readonly differenceHz: Hertz;
+  /** Of the pair's clouding at the place, 0 … 1. */
+  readonly share: number;
+}
+
+/** Two notes and their part in the clouding of a register at its cloudiest place. */
+export interface PairShare {
+  readonly lowerId: string;
+  readonly upperId: string;
+  readonly register: Register;
+  /** Of the register's clouding, 0 … 1; the shares of all pairs add up to 1. */
+  readonly share: number;
+  /** Largest first, at most three. */
+  readonly meetings: readonly PartialMeeting[];
+}
+
+/** Everything that the bench shows of one chord. */
+export interface ChordAnalysis {
+  readonly voices: readonly VoiceSound[];
+  readonly muddiness: {
+    /** Of the chord: its cloudiest register's. */
+    readonly index: number;
+    readonly register: Register | null;
+    /** All seven, low to high. */
+    readonly registers: readonly RegisterMuddiness[];
+  };
+  /** The pairs under their limit, the furthest under first. */
+  readonly limits: readonly LimitFinding[];
+  /** What makes the cloudiest register, largest share first. */
+  readonly pairs: readonly PairShare[];
+}
+
+/**
+ * Judges one chord: its voices' partials, the muddiness by register, the pairs under their low interval
+ * limit, and which notes and partials make the cloudiest register.
+ * @param chord 0 to 40 voices
+ * @param settings what the sound depends on besides
+ */
+export function analyseChord(chord: Chord, settings: SoundSettings): ChordAnalysis {
+  void chord;
+  void settings;
+  throw new Error('being built');
+}
