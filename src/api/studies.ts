@@ -1,0 +1,29 @@
+import type { BodyInputOf, QueryInputOf } from '#shared/contracts/endpoint';
+import * as contract from '#shared/contracts/studies';
+import { call } from '@/api/call';
+
+export const listStudies = (query: QueryInputOf<typeof contract.listStudies>) =>
+  call(contract.listStudies, { query });
+
+export const createStudy = (body: BodyInputOf<typeof contract.createStudy>) =>
+  call(contract.createStudy, { body });
+
+export const readStudy = (studyId: string) => call(contract.readStudy, { params: { studyId } });
+
+export const saveStudy = (studyId: string, body: BodyInputOf<typeof contract.saveStudy>) =>
+  call(contract.saveStudy, { params: { studyId }, body });
+
+export const renameStudy = (studyId: string, body: BodyInputOf<typeof contract.renameStudy>) =>
+  call(contract.renameStudy, { params: { studyId }, body });
+
+export const deleteStudy = (studyId: string) => call(contract.deleteStudy, { params: { studyId } });
+
+export const restoreStudy = (studyId: string) => call(contract.restoreStudy, { params: { studyId } });
+
+export const listShares = (studyId: string) => call(contract.listShares, { params: { studyId } });
+
+export const createShare = (studyId: string, body: BodyInputOf<typeof contract.createShare>) =>
+  call(contract.createShare, { params: { studyId }, body });
+
+export const deleteShare = (studyId: string, shareId: string) =>
+  call(contract.deleteShare, { params: { studyId, shareId } });

@@ -1,0 +1,48 @@
+import { nextTick } from 'vue';
+import { createRouter, createWebHistory, type RouteLocationNormalized, type Router } from 'vue-router';
+import { routes } from '@/router/routes';
+import { useSessionStore } from '@/stores/session.store';
+
+const SITE = 'Siltline';
+
+async function admit(to: RouteLocationNormalized) {
+  const session = useSessionStore();
+  await session.load();
+  if (to.meta.for === 'account' && session.status === 'ready' && !session.account) {
+    return { name: 'sign-in', query: { next: to.fullPath } };
+  }
+  if (to.meta.for === 'demo' && session.status === 'ready' && !session.demo) {
+    return { name: 'missing', params: { missing: to.path.split('/').slice(1) }, replace: true };
+  }
+  return true;
+}
+
+/** Begins the new page where its heading is, for those who cannot see that it changed. */
+async function focusHeading(): Promise<void> {
+  await nextTick();
+  const heading = document.querySelector<HTMLElement>('main h1');
+  heading?.setAttribute('tabindex', '-1');
+  heading?.focus({ preventScroll: true });
+}
+
+/** A step that only gives the page in view its address leaves the focus where it is. */
+function staysInPlace(): boolean {
+  const state: unknown = history.state;
+  return typeof state === 'object' && state !== null && 'inPlace' in state && state.inPlace === true;
+}
+
+export function createSiltlineRouter(): Router {
+  const router = createRouter({
+    history: createWebHistory(),
+    routes,
+    scrollBehavior: (to, from, saved) => saved ?? (to.path === from.path ? false : { top: 0 }),
+  });
+  router.beforeEach(admit);
+  router.afterEach((to, from, failure) => {
+    if (failure) return;
+    document.title = to.meta.title ? `${to.meta.title} · ${SITE}` : SITE;
+    const isFirstPage = from.matched.length === 0;
+    if (!isFirstPage && to.path !== from.path && !staysInPlace()) void focusHeading();
+  });
+  return router;
+}
