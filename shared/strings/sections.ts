@@ -27,7 +27,13 @@ export const SECTION_FACTS: Readonly<Record<Section, SectionFacts>> = {
   violin2: { section: 'violin2', instrument: 'violin', plural: 'second violins', short: 'Vn II', mark: '◆' },
   viola: { section: 'viola', instrument: 'viola', plural: 'violas', short: 'Va', mark: '■' },
   cello: { section: 'cello', instrument: 'cello', plural: 'cellos', short: 'Vc', mark: '▲' },
-  doubleBass: { section: 'doubleBass', instrument: 'doubleBass', plural: 'double basses', short: 'DB', mark: '▬' },
+  doubleBass: {
+    section: 'doubleBass',
+    instrument: 'doubleBass',
+    plural: 'double basses',
+    short: 'DB',
+    mark: '▬',
+  },
 };
 
 /** Players per section. */

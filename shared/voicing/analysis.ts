@@ -1,7 +1,15 @@
+import { MUDDINESS_CONSTANTS } from '#shared/data/muddiness-constants';
 import type { Section } from '#shared/strings/sections';
 import type { Chord, Dynamic, Ensemble, Intonation, Technique } from '#shared/study/study.document';
 import type { Decibels, Hertz, Midi, Semitones } from '#shared/units';
+import { explainPeak } from '#shared/voicing/explanation';
+import { limitFindings } from '#shared/voicing/limits';
+import { joinUnisons } from '#shared/voicing/muddiness/joined';
+import { muddinessModel } from '#shared/voicing/muddiness/model';
+import type { RegisterPeak } from '#shared/voicing/muddiness/scores';
+import { indexOf, registerPeaks } from '#shared/voicing/muddiness/scores';
 import type { Register } from '#shared/voicing/registers';
+import { soundOf } from '#shared/voicing/sound';
 
 /** What the sound of a chord depends on besides its voices. */
 export interface SoundSettings {
@@ -87,14 +95,43 @@ export interface ChordAnalysis {
   readonly pairs: readonly PairShare[];
 }
 
+/** Half a semitone: halving it moves no chord's index by a point. */
+const AXIS_STEP: Semitones = 0.5;
+
 /**
  * Judges one chord: its voices' partials, the muddiness by register, the pairs under their low interval
  * limit, and which notes and partials make the cloudiest register.
  * @param chord 0 to 40 voices
  * @param settings what the sound depends on besides
+ * @throws RangeError where a pitch or the tonic is not a note
  */
 export function analyseChord(chord: Chord, settings: SoundSettings): ChordAnalysis {
-  void chord;
-  void settings;
-  throw new Error('being built');
+  const voices = soundOf(chord, settings);
+  const model = muddinessModel(MUDDINESS_CONSTANTS, settings.a4Hz, AXIS_STEP);
+  const joined = joinUnisons(voices, settings.a4Hz);
+  const density = model.densityOf(joined);
+  const peaks = registerPeaks(density.density, model.axis);
+  const cloudiest = cloudiestOf(peaks);
+  return {
+    voices,
+    muddiness: {
+      index: cloudiest ? indexOf(cloudiest.density, MUDDINESS_CONSTANTS.threshold) : 0,
+      register: cloudiest?.register ?? null,
+      registers: peaks.map(({ register, density: peak, at }) => ({
+        register,
+        index: indexOf(peak, MUDDINESS_CONSTANTS.threshold),
+        at: peak > 0 ? at : null,
+      })),
+    },
+    limits: limitFindings(voices),
+    pairs: cloudiest ? explainPeak(cloudiest, voices, joined, density, model) : [],
+  };
+}
+
+/** The register with the highest peak; null where nothing clouds. */
+function cloudiestOf(peaks: readonly RegisterPeak[]): RegisterPeak | null {
+  return peaks.reduce<RegisterPeak | null>(
+    (best, peak) => (peak.density > (best?.density ?? 0) ? peak : best),
+    null,
+  );
 }

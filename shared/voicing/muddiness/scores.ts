@@ -1,0 +1,37 @@
+import type { Midi } from '#shared/units';
+import type { PitchAxis } from '#shared/voicing/muddiness/axis';
+import { AXIS_LOW, pitchAt } from '#shared/voicing/muddiness/axis';
+import type { Register } from '#shared/voicing/registers';
+import { REGISTER_BOUNDS } from '#shared/voicing/registers';
+
+const FULL = 100;
+
+/** The cloudiest place of a register. */
+export interface RegisterPeak {
+  readonly register: Register;
+  /** ρ there. */
+  readonly density: number;
+  readonly point: number;
+  readonly at: Midi;
+}
+
+/**
+ * The index of a clouding density.
+ * @returns 0 … 100; 50 where the density is the threshold
+ * @source 100 · (1 − 2^(−ρ / T))
+ * @example indexOf(0.2, 0.2) // 50
+ */
+export function indexOf(density: number, threshold: number): number {
+  return FULL * (1 - 2 ** (-density / threshold));
+}
+
+/** @returns the cloudiest place of each register, low to high; its edges belong to both neighbours */
+export function registerPeaks(density: Float64Array, axis: PitchAxis): readonly RegisterPeak[] {
+  return REGISTER_BOUNDS.map(({ register, low, high }) => {
+    const first = Math.round((low - AXIS_LOW) / axis.step);
+    const last = Math.round((high - AXIS_LOW) / axis.step);
+    let point = first;
+    for (let x = first; x <= last; x += 1) if ((density[x] ?? 0) > (density[point] ?? 0)) point = x;
+    return { register, density: density[point] ?? 0, point, at: pitchAt(axis, point) };
+  });
+}

@@ -1,0 +1,14 @@
+import type { StudyDocument } from '#shared/study/study.document';
+import type { SoundSettings } from '#shared/voicing/analysis';
+
+/** What of a study its sound depends on, besides the chords. */
+export function soundSettingsOf(
+  study: Pick<StudyDocument, 'a4Hz' | 'intonation' | 'ensemble' | 'key'>,
+): SoundSettings {
+  return {
+    a4Hz: study.a4Hz,
+    intonation: study.intonation,
+    ensemble: study.ensemble,
+    key: { tonic: study.key.tonic },
+  };
+}
