@@ -7,37 +7,43 @@ export interface ReadNote {
   readonly alteration: number;
 }
 
-const SYLLABLES: Readonly<Record<string, Letter>> = {
-  do: 'C',
-  ut: 'C',
-  re: 'D',
-  ré: 'D',
-  mi: 'E',
-  fa: 'F',
-  sol: 'G',
-  la: 'A',
-  si: 'B',
-};
+const SYLLABLES = new Map<string, Letter>(
+  Object.entries({
+    do: 'C',
+    ut: 'C',
+    re: 'D',
+    ré: 'D',
+    mi: 'E',
+    fa: 'F',
+    sol: 'G',
+    la: 'A',
+    si: 'B',
+  }),
+);
 
-const SIGNED: Readonly<Record<string, number>> = {
-  '': 0,
-  b: -1,
-  '♭': -1,
-  bb: -2,
-  '♭♭': -2,
-  '𝄫': -2,
-  '#': 1,
-  '♯': 1,
-  '##': 2,
-  '♯♯': 2,
-  x: 2,
-  '𝄪': 2,
-};
+const SIGNED = new Map<string, number>(
+  Object.entries({
+    '': 0,
+    b: -1,
+    '♭': -1,
+    bb: -2,
+    '♭♭': -2,
+    '𝄫': -2,
+    '#': 1,
+    '♯': 1,
+    '##': 2,
+    '♯♯': 2,
+    x: 2,
+    '𝄪': 2,
+  }),
+);
 /** German endings, those of a vowel (Es, As) included. */
-const ENDINGS: Readonly<Record<string, number>> = { '': 0, is: 1, isis: 2, es: -1, eses: -2, s: -1, ses: -2 };
+const ENDINGS = new Map<string, number>(
+  Object.entries({ '': 0, is: 1, isis: 2, es: -1, eses: -2, s: -1, ses: -2 }),
+);
 
 function signed(stem: Letter | undefined, sign: string): ReadNote | null {
-  const alteration = SIGNED[sign];
+  const alteration = SIGNED.get(sign);
   return stem === undefined || alteration === undefined ? null : { letter: stem, alteration };
 }
 
@@ -47,8 +53,8 @@ function readLetter(text: string): ReadNote | null {
 }
 
 function readSyllable(text: string): ReadNote | null {
-  const syllable = Object.keys(SYLLABLES).find((known) => text.startsWith(known));
-  return syllable === undefined ? null : signed(SYLLABLES[syllable], text.slice(syllable.length));
+  const syllable = [...SYLLABLES.keys()].find((known) => text.startsWith(known));
+  return syllable === undefined ? null : signed(SYLLABLES.get(syllable), text.slice(syllable.length));
 }
 
 /** B is the flattened H; with a sign of its own, B is read as in English, since nothing else is meant. */
@@ -60,7 +66,7 @@ function readGerman(text: string): ReadNote | null {
   const ending = text.slice(1);
   const vowelOnly = ending === 's' || ending === 'ses';
   if (vowelOnly && letter !== 'A' && letter !== 'E') return null;
-  const alteration = ENDINGS[ending];
+  const alteration = ENDINGS.get(ending);
   return alteration === undefined ? signed(letter, ending) : { letter, alteration };
 }
 
