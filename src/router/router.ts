@@ -1,5 +1,6 @@
 import { nextTick } from 'vue';
 import { createRouter, createWebHistory, type RouteLocationNormalized, type Router } from 'vue-router';
+import { nextPath } from '@/router/next';
 import { routes } from '@/router/routes';
 import { useSessionStore } from '@/stores/session.store';
 
@@ -8,11 +9,14 @@ const SITE = 'Siltline';
 async function admit(to: RouteLocationNormalized) {
   const session = useSessionStore();
   await session.load();
-  if (to.meta.for === 'account' && session.status === 'ready' && !session.account) {
-    return { name: 'sign-in', query: { next: to.fullPath } };
+  // Without an answer nobody is turned away: the page itself says what it cannot do.
+  if (session.status !== 'ready') return true;
+  if (to.meta.for === 'account' && !session.account) return { name: 'sign-in', query: { next: to.fullPath } };
+  if (to.meta.for === 'visitor' && session.account) {
+    return nextPath(to.query.next, location.origin) ?? { name: 'lab' };
   }
-  if (to.meta.for === 'demo' && session.status === 'ready' && !session.demo) {
-    return { name: 'missing', params: { missing: to.path.split('/').slice(1) }, replace: true };
+  if (to.meta.for === 'demo' && !session.demo) {
+    return { name: 'missing', params: { missing: to.path.split('/').slice(1) } };
   }
   return true;
 }

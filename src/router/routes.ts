@@ -4,8 +4,8 @@ declare module 'vue-router' {
   interface RouteMeta {
     /** Of the browser's tab. */
     title?: string;
-    /** Who may come: only those signed in, or only in the demonstration. */
-    for?: 'account' | 'demo';
+    /** Who may come: only those signed in, only those who are not, or only in the demonstration. */
+    for?: 'account' | 'visitor' | 'demo';
   }
 }
 
@@ -13,10 +13,41 @@ const lab = () => import('@/pages/LabPage.vue').then((module) => module.default)
 
 export const routes: RouteRecordRaw[] = [
   { path: '/', name: 'lab', component: lab, meta: { title: 'Lab' } },
+  { path: '/studies/:studyId', name: 'study', component: lab, meta: { title: 'Study', for: 'account' } },
+  {
+    path: '/sign-in',
+    name: 'sign-in',
+    component: () => import('@/pages/SignInPage.vue'),
+    meta: { title: 'Sign in', for: 'visitor' },
+  },
+  {
+    path: '/sign-up',
+    name: 'sign-up',
+    component: () => import('@/pages/SignUpPage.vue'),
+    meta: { title: 'Sign up', for: 'visitor' },
+  },
+  {
+    path: '/confirm',
+    name: 'confirm',
+    component: () => import('@/pages/ConfirmPage.vue'),
+    meta: { title: 'Confirm your address' },
+  },
+  {
+    path: '/forgotten-password',
+    name: 'forgotten-password',
+    component: () => import('@/pages/ForgottenPasswordPage.vue'),
+    meta: { title: 'Forgotten password' },
+  },
+  {
+    path: '/reset-password',
+    name: 'reset-password',
+    component: () => import('@/pages/ResetPasswordPage.vue'),
+    meta: { title: 'Set a new password' },
+  },
   {
     path: '/:missing(.*)*',
     name: 'missing',
     component: () => import('@/pages/NotFoundPage.vue'),
-    meta: { title: 'Not found' },
+    meta: { title: 'Nothing here' },
   },
 ];

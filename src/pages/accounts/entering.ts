@@ -1,0 +1,27 @@
+import { useRoute, useRouter } from 'vue-router';
+import { notice } from '@/composables/notices';
+import { nextPath } from '@/router/next';
+import { adoptDraft } from '@/stores/draft-adoption';
+import { useSessionStore } from '@/stores/session.store';
+
+/** Signs in and goes on: to the study that the draft became, to where one was sent from, or to the studies. */
+export function useEntering() {
+  const session = useSessionStore();
+  const router = useRouter();
+  const route = useRoute();
+
+  async function enter(email: string, password: string): Promise<void> {
+    const account = await session.signIn(email, password);
+    const adopted = await adoptDraft(account);
+    if (adopted.kind === 'adopted') {
+      notice(`Your draft is saved as your study “${adopted.study.document.title}”.`);
+      await router.push({ name: 'study', params: { studyId: adopted.study.id } });
+      return;
+    }
+    if (adopted.kind === 'kept')
+      notice(`Your draft could not be saved yet. It is kept in the Lab: save it there.`);
+    await router.push(nextPath(route.query.next, location.origin) ?? { name: 'lab' });
+  }
+
+  return { enter };
+}
