@@ -1,5 +1,5 @@
 import { defineConfig, mergeConfig } from 'vitest/config';
-import viteConfig from './vite.config';
+import viteConfig from './vite.config.ts';
 
 export default mergeConfig(
   viteConfig,
@@ -19,7 +19,20 @@ export default mergeConfig(
             include: ['tests/api/**/*.test.ts'],
             globalSetup: ['tests/support/database.global.ts'],
             fileParallelism: false,
+            sequence: { groupOrder: 1 },
             testTimeout: 20_000,
+            hookTimeout: 60_000,
+          },
+        },
+        {
+          extends: true,
+          test: {
+            name: 'operations',
+            environment: 'node',
+            include: ['tests/operations/**/*.test.ts'],
+            fileParallelism: false,
+            sequence: { groupOrder: 2 },
+            testTimeout: 60_000,
             hookTimeout: 60_000,
           },
         },
