@@ -1,0 +1,49 @@
+import compression from 'compression';
+import express, { Router, type Express } from 'express';
+import { accountRoutes } from '#server/accounts/accounts.routes';
+import { annotationRoutes } from '#server/annotations/annotations.routes';
+import { demoRoutes } from '#server/demo/demo.routes';
+import type { Deps } from '#server/deps';
+import { healthRoutes } from '#server/health/health.routes';
+import { clientFiles } from '#server/http/client-files';
+import { errorHandler, unknownRoute } from '#server/http/error-handler';
+import { knownMethodsOnly, noStore, securityHeaders } from '#server/http/headers';
+import { httpsOnly } from '#server/http/https-only';
+import { requestLog } from '#server/http/request-log';
+import { csrfProtection } from '#server/sessions/csrf';
+import { sessions, viewer } from '#server/sessions/session.middleware';
+import { sessionRoutes } from '#server/sessions/sessions.routes';
+import { clientFolder } from '#server/setup/product';
+import { shareRoutes } from '#server/shares/shares.routes';
+import { studyRoutes } from '#server/studies/studies.routes';
+
+/** What knows who is asking. */
+function sessionRouter(deps: Deps): Router {
+  const router = Router();
+  router.use(sessions(deps), csrfProtection, viewer(deps));
+  router.use(sessionRoutes(deps), accountRoutes(deps));
+  router.use(studyRoutes(deps), shareRoutes(deps), annotationRoutes(deps));
+  if (deps.env.mode === 'demo') router.use(demoRoutes(deps));
+  router.use('/api', unknownRoute);
+  return router;
+}
+
+/** @param pages the folder of the built client; without it only the API is served. */
+export function createApp(deps: Deps, pages = clientFolder): Express {
+  const { env, log } = deps;
+  const https = env.publicUrl.startsWith('https:');
+  const api = sessionRouter(deps);
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('trust proxy', env.trustProxy);
+
+  app.use(requestLog(log), securityHeaders(https), knownMethodsOnly);
+  app.use('/api', noStore);
+  app.use(healthRoutes(deps));
+  if (https) app.use(httpsOnly(env.publicUrl));
+  app.use(compression());
+  app.use((req, res, next) => (/^\/api(\/|$)/i.test(req.path) ? api(req, res, next) : next()));
+  if (pages !== undefined) app.use(clientFiles(pages));
+  app.use(unknownRoute, errorHandler);
+  return app;
+}

@@ -1,0 +1,42 @@
+import type { Letter } from '#server/mail/letters';
+
+const ENTITIES: Readonly<Record<string, string>> = {
+  '&': '&amp;',
+  '<': '&lt;',
+  '>': '&gt;',
+  '"': '&quot;',
+  "'": '&#39;',
+};
+
+function escapeHtml(text: string): string {
+  return text.replace(/[&<>"']/g, (character) => ENTITIES[character] ?? '');
+}
+
+/** Titles and names are people's text: line breaks and direction marks would reach headers or disguise what follows. */
+function oneLine(text: string): string {
+  return text.replace(/[\p{Cc}\u2028\u2029\u202a-\u202e\u2066-\u2069]+/gu, ' ').trim();
+}
+
+const MAX_SUBJECT = 200;
+
+export function renderSubject(letter: Letter): string {
+  return [...oneLine(letter.subject)].slice(0, MAX_SUBJECT).join('');
+}
+
+export function renderText({ paragraphs, link, reason }: Letter): string {
+  const body = link === undefined ? [...paragraphs] : [...paragraphs, `${link.label}:\n${link.url}`];
+  return [
+    ...body.map((paragraph) => paragraph.replace(/\p{Cc}/gu, (c) => (c === '\n' ? c : ' '))),
+    '-- ',
+    reason,
+  ].join('\n\n');
+}
+
+export function renderHtml({ paragraphs, link, reason }: Letter): string {
+  const body = paragraphs.map((paragraph) => `<p>${escapeHtml(oneLine(paragraph))}</p>`);
+  if (link !== undefined) {
+    body.push(`<p><a href="${escapeHtml(link.url)}">${escapeHtml(link.label)}</a></p>`);
+  }
+  const small = `<p style="color:#666;font-size:smaller">${escapeHtml(oneLine(reason))}</p>`;
+  return `<!doctype html><html lang="en"><meta charset="utf-8"><body>${body.join('')}${small}</body></html>`;
+}

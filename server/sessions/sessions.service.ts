@@ -1,0 +1,57 @@
+import type { Account } from '#shared/contracts/accounts';
+import {
+  findAccountByEmail,
+  setPasswordHash,
+  type AccountRecord,
+} from '#server/accounts/accounts.repository';
+import { normaliseEmail } from '#server/accounts/email';
+import type { Deps } from '#server/deps';
+import { RequestError } from '#server/http/request-error';
+import { SIGN_IN_PER_ACCOUNT, SIGN_IN_PER_ADDRESS } from '#server/limits/limits.rules';
+import { countTry, forgetTries } from '#server/limits/limits.service';
+
+type ServiceDeps = Pick<Deps, 'db' | 'clock' | 'passwords'>;
+
+/** Does not tell which of the two it was. */
+function refused(): RequestError {
+  return new RequestError(401, 'sign-in.refused', 'This address and this password do not belong together.');
+}
+
+/** Told only to somebody who knows the password. */
+function unconfirmed(): RequestError {
+  return new RequestError(
+    403,
+    'account.unconfirmed',
+    'Your address is not confirmed yet: open the link in the mail that we sent you, or ask for a new one.',
+  );
+}
+
+/** The cost was raised since: now that the password is at hand, it is hashed anew. */
+async function renewHash(
+  { db, passwords }: ServiceDeps,
+  account: AccountRecord,
+  password: string,
+): Promise<void> {
+  if (passwords.isOutdated(account.passwordHash)) {
+    await setPasswordHash(db, account.id, await passwords.hash(password));
+  }
+}
+
+/** Checks who somebody says they are. Known and unknown addresses take the same way. */
+export async function authenticate(
+  deps: ServiceDeps,
+  credentials: { readonly email: string; readonly password: string },
+  address: string,
+): Promise<Account> {
+  const { db, clock, passwords } = deps;
+  const email = normaliseEmail(credentials.email);
+  await countTry(db, SIGN_IN_PER_ADDRESS, address, clock());
+  await countTry(db, SIGN_IN_PER_ACCOUNT, email, clock());
+  const account = await findAccountByEmail(db, email);
+  const fits = await passwords.matches(credentials.password, account?.passwordHash ?? null);
+  if (account === null || !fits) throw refused();
+  await forgetTries(db, SIGN_IN_PER_ACCOUNT, email);
+  if (account.confirmedAt === null) throw unconfirmed();
+  await renewHash(deps, account, credentials.password);
+  return account;
+}
