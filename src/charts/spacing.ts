@@ -1,0 +1,104 @@
+import type { NoteNaming } from '#shared/pitch/display';
+import { displayPitch } from '#shared/pitch/display';
+import { intervalName, shortIntervalName } from '#shared/pitch/interval-names';
+import { parsePitch } from '#shared/pitch/names';
+import type { ChordAnalysis, VoiceSound } from '#shared/voicing/analysis';
+import { spreadLabels } from '@/charts/spread-labels';
+import type { PitchAxis } from '@/charts/pitch-axis';
+
+/** A bracket from one note to another. */
+export interface SpacingBracket {
+  readonly lowerId: string;
+  readonly upperId: string;
+  readonly top: number;
+  readonly bottom: number;
+  /** 0 for neighbours; pairs further apart stand beside them. */
+  readonly column: number;
+  /** Semitones under the low interval limit, 0 where it is kept. */
+  readonly under: number;
+  /** Middle of its words; null where there is no room for them. */
+  readonly labelY: number | null;
+  readonly label: string;
+  /** The whole of it, for a reader who cannot see it. */
+  readonly spoken: string;
+}
+
+/** Two lines of 12-pixel type. */
+const LABEL_GAP = 15;
+const MOST_COLUMNS = 4;
+
+type Placed = Omit<SpacingBracket, 'labelY'>;
+type Pair = readonly [VoiceSound, VoiceSound];
+
+function words(lower: VoiceSound, upper: VoiceSound, under: number, naming: NoteNaming) {
+  const [a, b] = [parsePitch(lower.pitch), parsePitch(upper.pitch)];
+  const [name, short] = a && b ? [intervalName(a, b), shortIntervalName(a, b)] : ['', ''];
+  const suffix = under > 0 ? `, ${Math.round(under)} under` : '';
+  const notes = `${displayPitch(lower.pitch, naming)} to ${displayPitch(upper.pitch, naming)}`;
+  return {
+    label: `${short}${suffix}`,
+    spoken: `${notes}: ${name}${under > 0 ? `, ${Math.round(under)} semitones under its low limit` : ''}`,
+  };
+}
+
+/** Neighbours first, then the other pairs under their limit, in the order of the analysis. */
+function pairsOf({ voices, limits }: ChordAnalysis): Pair[] {
+  const rising = [...voices].sort((a, b) => a.midi - b.midi);
+  const byId = new Map(voices.map((voice) => [voice.id, voice]));
+  const neighbours = rising.slice(1).map((upper, index): Pair => [rising[index] ?? upper, upper]);
+  const known = new Set(neighbours.map(([lower, upper]) => `${lower.id} ${upper.id}`));
+  const others = limits.flatMap(({ lowerId, upperId }): Pair[] => {
+    const [lower, upper] = [byId.get(lowerId), byId.get(upperId)];
+    return lower && upper && !known.has(`${lowerId} ${upperId}`) ? [[lower, upper]] : [];
+  });
+  return [...neighbours.filter(([lower, upper]) => lower.midi !== upper.midi), ...others];
+}
+
+/** The first column beside the neighbours in which nothing covers it. */
+function columnFor(placed: readonly Placed[], top: number, bottom: number): number {
+  const free = (column: number): boolean =>
+    placed.every((other) => other.column !== column || other.bottom < top || other.top > bottom);
+  let column = 1;
+  while (column < MOST_COLUMNS && !free(column)) column += 1;
+  return column;
+}
+
+/**
+ * The brackets of the spacing pane: between neighbouring notes and between any other pair under its limit.
+ * Where there is not room for all words, those of pairs under their limit are kept.
+ * @returns low pairs last, so that the heavier ones are drawn over the others
+ */
+export function spacingOf(
+  analysis: ChordAnalysis,
+  axis: PitchAxis,
+  naming: NoteNaming,
+): readonly SpacingBracket[] {
+  const under = new Map(analysis.limits.map((limit) => [`${limit.lowerId} ${limit.upperId}`, limit]));
+  const neighbours = Math.max(analysis.voices.length - 1, 0);
+  const placed: Placed[] = [];
+  pairsOf(analysis).forEach(([lower, upper], index) => {
+    const [top, bottom] = [axis.yOf(upper.midi), axis.yOf(lower.midi)];
+    const below = under.get(`${lower.id} ${upper.id}`)?.semitonesBelow ?? 0;
+    const column =
+      index < neighbours && isNeighbour(analysis, lower, upper) ? 0 : columnFor(placed, top, bottom);
+    const ids = { lowerId: lower.id, upperId: upper.id };
+    placed.push({ ...ids, top, bottom, column, under: below, ...words(lower, upper, below, naming) });
+  });
+  return withLabels(placed, axis);
+}
+
+function isNeighbour({ voices }: ChordAnalysis, lower: VoiceSound, upper: VoiceSound): boolean {
+  return voices.every(({ midi }) => midi <= lower.midi || midi >= upper.midi);
+}
+
+function withLabels(placed: readonly Placed[], axis: PitchAxis): SpacingBracket[] {
+  const room = Math.floor((axis.height - axis.strip) / LABEL_GAP);
+  const worded = new Set([...placed].sort((a, b) => b.under - a.under).slice(0, room));
+  const labelled = placed.filter((bracket) => worded.has(bracket));
+  const middles = labelled.map(({ top, bottom }) => (top + bottom) / 2);
+  const bounds = { top: axis.strip, bottom: axis.height - LABEL_GAP / 2 };
+  const ys = new Map(spreadLabels(middles, LABEL_GAP, bounds).map((y, index) => [labelled[index], y]));
+  return placed
+    .map((bracket) => ({ ...bracket, labelY: ys.get(bracket) ?? null }))
+    .sort((a, b) => a.under - b.under);
+}

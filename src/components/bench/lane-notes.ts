@@ -1,0 +1,88 @@
+import { displayPitch, spokenPitch, type NoteNaming } from '#shared/pitch/display';
+import { midiOfName } from '#shared/pitch/names';
+import type { SpellingKey } from '#shared/pitch/spelling';
+import { SECTION_FACTS, SECTIONS, type Section } from '#shared/strings/sections';
+import type { Chord, Ensemble, Voice } from '#shared/study/study.document';
+import type { ChordAnalysis, VoiceSound } from '#shared/voicing/analysis';
+import { reachOf } from '#shared/voicing/reach.sentences';
+import { hertzText } from '#shared/voicing/words';
+import type { PitchAxis } from '@/charts/pitch-axis';
+import { tokenColumns, type TokenColumn } from '@/charts/token-columns';
+
+/** A note as it stands in the lanes. */
+export interface LaneNote {
+  readonly voice: Voice;
+  readonly midi: number;
+  readonly name: string;
+  readonly spoken: string;
+  readonly hertz: string;
+  readonly beyond: boolean;
+  /** Pixels from the top. */
+  readonly y: number;
+  /** Middle, in per cent of all five lanes. */
+  readonly left: number;
+}
+
+interface Shown {
+  readonly chord: Chord;
+  readonly analysis: ChordAnalysis;
+  readonly ensemble: Ensemble;
+  readonly spelling: SpellingKey;
+  readonly naming: NoteNaming;
+  readonly axis: PitchAxis;
+}
+
+/** Height of a token and a little air, in pixels. */
+const TOKEN_HEIGHT = 24;
+const LANE_PERCENT = 100 / SECTIONS.length;
+
+function fundamental(sound: VoiceSound | undefined): string {
+  const first = sound?.partials.find(({ n }) => n === 1);
+  return first ? hertzText(first.frequencyHz) : '';
+}
+
+function leftOf(section: Section, { column, columns }: TokenColumn): number {
+  return LANE_PERCENT * (SECTIONS.indexOf(section) + (column + 1) / (columns + 1));
+}
+
+function spokenOf(voice: Voice, hertz: string, beyond: boolean, naming: NoteNaming): string {
+  const parts = [
+    `${SECTION_FACTS[voice.section].plural}, ${spokenPitch(voice.pitch, naming)}`,
+    hertz,
+    voice.locked ? 'locked' : '',
+    voice.stop === null ? '' : 'in a double stop',
+    voice.link === null ? '' : 'linked',
+    beyond ? 'out of reach' : '',
+  ];
+  return parts.filter((part) => part !== '').join(', ');
+}
+
+/** Places the notes of a chord in the five lanes, in the chord's own order. */
+export function laneNotes({ chord, analysis, ensemble, spelling, naming, axis }: Shown): readonly LaneNote[] {
+  const apart = TOKEN_HEIGHT / axis.semitone;
+  const columns = new Map<string, TokenColumn>();
+  for (const section of SECTIONS) {
+    const own = chord.voices.filter((voice) => voice.section === section);
+    const placed = tokenColumns(
+      own.map(({ id, pitch }) => ({ id, midi: midiOfName(pitch) })),
+      apart,
+    );
+    for (const [id, column] of placed) columns.set(id, column);
+  }
+  const sounds = new Map(analysis.voices.map((sound) => [sound.id, sound]));
+  return chord.voices.map((voice) => {
+    const midi = midiOfName(voice.pitch);
+    const hertz = fundamental(sounds.get(voice.id));
+    const beyond = reachOf(voice, ensemble.bass, spelling, naming).lying === 'beyond';
+    return {
+      voice,
+      midi,
+      name: displayPitch(voice.pitch, naming),
+      spoken: spokenOf(voice, hertz, beyond, naming),
+      hertz,
+      beyond,
+      y: axis.yOf(midi),
+      left: leftOf(voice.section, columns.get(voice.id) ?? { column: 0, columns: 1 }),
+    };
+  });
+}

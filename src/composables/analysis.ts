@@ -1,0 +1,25 @@
+import { analyseChord, type ChordAnalysis, type SoundSettings } from '#shared/voicing/analysis';
+import type { Chord } from '#shared/study/study.document';
+
+interface Known {
+  readonly settings: string;
+  readonly analysis: ChordAnalysis;
+}
+
+/** Chords are never altered, so that one judged once is judged for as long as it is kept. */
+const known = new WeakMap<Chord, Known>();
+
+/** Only what the sound depends on, so that a new title does not judge everything anew. */
+function settingsKey({ a4Hz, intonation, ensemble, key }: SoundSettings): string {
+  return JSON.stringify([a4Hz, intonation, ensemble, key.tonic]);
+}
+
+/** Judges a chord, or remembers how it was judged. */
+export function analysisOf(chord: Chord, settings: SoundSettings): ChordAnalysis {
+  const key = settingsKey(settings);
+  const kept = known.get(chord);
+  if (kept?.settings === key) return kept.analysis;
+  const analysis = analyseChord(chord, settings);
+  known.set(chord, { settings: key, analysis });
+  return analysis;
+}
