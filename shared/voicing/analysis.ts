@@ -1,15 +1,16 @@
-import { MUDDINESS_CONSTANTS } from '#shared/data/muddiness-constants';
 import type { Section } from '#shared/strings/sections';
 import type { Chord, Dynamic, Ensemble, Intonation, Technique } from '#shared/study/study.document';
 import type { Decibels, Hertz, Midi, Semitones } from '#shared/units';
 import { explainPeak } from '#shared/voicing/explanation';
 import { limitFindings } from '#shared/voicing/limits';
-import { joinUnisons } from '#shared/voicing/muddiness/joined';
-import { muddinessModel } from '#shared/voicing/muddiness/model';
-import type { RegisterPeak } from '#shared/voicing/muddiness/scores';
-import { indexOf, registerPeaks } from '#shared/voicing/muddiness/scores';
+import { joinUnisons, muddinessVoice } from '#shared/voicing/muddiness/joined';
+import type { MuddinessModel } from '#shared/voicing/muddiness/model';
+import { densityOf } from '#shared/voicing/muddiness/model';
+import { modelFor } from '#shared/voicing/muddiness/models';
+import { cloudiestOf, indexOf, registerPeaks } from '#shared/voicing/muddiness/scores';
 import type { Register } from '#shared/voicing/registers';
-import { soundOf } from '#shared/voicing/sound';
+import type { VoiceSource } from '#shared/voicing/sound';
+import { soundOf, sourcesOf } from '#shared/voicing/sound';
 
 /** What the sound of a chord depends on besides its voices. */
 export interface SoundSettings {
@@ -95,9 +96,6 @@ export interface ChordAnalysis {
   readonly pairs: readonly PairShare[];
 }
 
-/** Half a semitone: halving it moves no chord's index by a point. */
-const AXIS_STEP: Semitones = 0.5;
-
 /**
  * Judges one chord: its voices' partials, the muddiness by register, the pairs under their low interval
  * limit, and which notes and partials make the cloudiest register.
@@ -106,32 +104,29 @@ const AXIS_STEP: Semitones = 0.5;
  * @throws RangeError where a pitch or the tonic is not a note
  */
 export function analyseChord(chord: Chord, settings: SoundSettings): ChordAnalysis {
-  const voices = soundOf(chord, settings);
-  const model = muddinessModel(MUDDINESS_CONSTANTS, settings.a4Hz, AXIS_STEP);
-  const joined = joinUnisons(voices, settings.a4Hz);
-  const density = model.densityOf(joined);
-  const peaks = registerPeaks(density.density, model.axis);
+  const model = modelFor(settings.a4Hz);
+  const sources = sourcesOf(chord, settings);
+  const joined = joinUnisons(sources, settings.a4Hz);
+  const peaks = registerPeaks(densityOf(model, joined), model.axis);
   const cloudiest = cloudiestOf(peaks);
+  const { threshold } = model.constants;
   return {
-    voices,
+    voices: sources.map((source) => soundOf(source, shapeOf(source, model))),
     muddiness: {
-      index: cloudiest ? indexOf(cloudiest.density, MUDDINESS_CONSTANTS.threshold) : 0,
+      index: indexOf(cloudiest?.density ?? 0, threshold),
       register: cloudiest?.register ?? null,
-      registers: peaks.map(({ register, density: peak, at }) => ({
+      registers: peaks.map(({ register, density, at }) => ({
         register,
-        index: indexOf(peak, MUDDINESS_CONSTANTS.threshold),
-        at: peak > 0 ? at : null,
+        index: indexOf(density, threshold),
+        at: density > 0 ? at : null,
       })),
     },
-    limits: limitFindings(voices),
-    pairs: cloudiest ? explainPeak(cloudiest, voices, joined, density, model) : [],
+    limits: limitFindings(sources),
+    pairs: cloudiest ? explainPeak(cloudiest, sources, joined, model) : [],
   };
 }
 
-/** The register with the highest peak; null where nothing clouds. */
-function cloudiestOf(peaks: readonly RegisterPeak[]): RegisterPeak | null {
-  return peaks.reduce<RegisterPeak | null>(
-    (best, peak) => (peak.density > (best?.density ?? 0) ? peak : best),
-    null,
-  );
+function shapeOf(source: VoiceSource, { tables, a4Hz }: MuddinessModel): readonly Partial[] {
+  const { key, makeTone } = muddinessVoice(source, a4Hz);
+  return tables.ofTone(key, makeTone).tone.partials;
 }

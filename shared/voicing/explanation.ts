@@ -1,85 +1,109 @@
 import { midiOfFrequency } from '#shared/pitch/tuning';
 import type { PairShare, PartialMeeting, VoiceSound } from '#shared/voicing/analysis';
-import { WINDOW_REACH } from '#shared/voicing/muddiness/axis';
+import { AXIS_LOW, windowValue } from '#shared/voicing/muddiness/axis';
 import type { JoinedVoice } from '#shared/voicing/muddiness/joined';
-import type { Density, MuddinessModel } from '#shared/voicing/muddiness/model';
+import type { MuddinessEntry, MuddinessModel } from '#shared/voicing/muddiness/model';
+import { entryOf } from '#shared/voicing/muddiness/model';
 import { forEachMeeting } from '#shared/voicing/muddiness/pairs';
 import type { RegisterPeak } from '#shared/voicing/muddiness/scores';
+import type { Tone } from '#shared/voicing/muddiness/tones';
 import { cloudingAt } from '#shared/voicing/muddiness/tones';
 
 /** The partials that a reader can take in at once. */
 const MEETINGS_SHOWN = 3;
-const WINDOW_EXPONENT = 2;
 
 /**
  * Which pairs of notes, and which of their partials, make the clouding at a register's cloudiest place.
+ * @param peak the place
  * @param voices as they sound
- * @param joined the same with unisons joined, as the density was taken from
+ * @param joined the same with unisons joined, low to high
  * @returns shares of R^m between pairs of notes (they add up to 1) and of r within a pair, largest first
  */
 export function explainPeak(
   peak: RegisterPeak,
-  voices: readonly VoiceSound[],
+  voices: readonly Pick<VoiceSound, 'id'>[],
   joined: readonly JoinedVoice[],
-  density: Density,
   model: MuddinessModel,
 ): readonly PairShare[] {
-  const whole = density.pairs.reduce((sum, pair) => sum + pair.at(peak.point), 0);
-  if (whole <= 0) return [];
-  const shares = density.pairs.flatMap((pair) => {
-    const lower = joined[pair.first];
-    const upper = joined[pair.second];
-    const share = pair.at(peak.point) / whole;
-    if (!lower || !upper || share <= 0) return [];
-    const meetings = meetingsOf(lower, upper, peak, model);
-    return memberPairs(lower, upper, voices).map(({ lowerId, upperId, part }) => ({
-      lowerId,
-      upperId,
-      register: peak.register,
-      share: share * part,
-      meetings,
-    }));
-  });
-  return shares.sort((a, b) => b.share - a.share);
+  const entries = joined.map((voice) => entryOf(voice, model));
+  const pairs = entries.flatMap((upper, second) =>
+    entries.slice(0, second).map((lower, first) => ({
+      lower,
+      upper,
+      members: memberPairs(joined[first], joined[second], voices),
+      clouding: pairCloudingAt(peak.point, lower, upper, model),
+    })),
+  );
+  const whole = pairs.reduce((sum, { clouding }) => sum + clouding, 0);
+  return pairs
+    .filter(({ clouding }) => clouding > 0)
+    .flatMap(({ lower, upper, members, clouding }) => {
+      const meetings = meetingsOf(lower.table.tone, upper.table.tone, peak, model);
+      return members.map(({ lowerId, upperId, part }) => ({
+        lowerId,
+        upperId,
+        register: peak.register,
+        share: (clouding / whole) * part,
+        meetings,
+      }));
+    })
+    .sort((a, b) => b.share - a.share);
+}
+
+function pairCloudingAt(
+  point: number,
+  lower: MuddinessEntry,
+  upper: MuddinessEntry,
+  { tables }: MuddinessModel,
+): number {
+  if (lower.energy === 0 || upper.energy === 0) return 0;
+  const { from, values } = tables.ofPair(lower.table, upper.table);
+  return lower.weight * upper.weight * (values[point - from] ?? 0);
 }
 
 /** Voices in unison share what their joint note does, by their energies. */
-function memberPairs(lower: JoinedVoice, upper: JoinedVoice, voices: readonly VoiceSound[]) {
-  return lower.members.flatMap((a) =>
-    upper.members.flatMap((b) => {
+function memberPairs(
+  lower: JoinedVoice | undefined,
+  upper: JoinedVoice | undefined,
+  voices: readonly Pick<VoiceSound, 'id'>[],
+): readonly { lowerId: string; upperId: string; part: number }[] {
+  return (lower?.members ?? []).flatMap((a) =>
+    (upper?.members ?? []).flatMap((b) => {
       const lowerId = voices[a.index]?.id;
       const upperId = voices[b.index]?.id;
-      return lowerId === undefined || upperId === undefined
-        ? []
-        : [{ lowerId, upperId, part: a.part * b.part }];
+      if (lowerId === undefined || upperId === undefined) return [];
+      return [{ lowerId, upperId, part: a.part * b.part }];
     }),
   );
 }
 
 function meetingsOf(
-  lower: JoinedVoice,
-  upper: JoinedVoice,
+  lower: Tone,
+  upper: Tone,
   peak: RegisterPeak,
-  model: MuddinessModel,
+  { constants, axis, a4Hz }: MuddinessModel,
 ): readonly PartialMeeting[] {
-  const found: { meeting: Omit<PartialMeeting, 'share'>; mass: number }[] = [];
-  forEachMeeting(lower.tone, upper.tone, (i, j, y) => {
-    const a = lower.tone.frequencies[i] ?? 0;
-    const b = upper.tone.frequencies[j] ?? 0;
-    const weight = windowAt(midiOfFrequency((a + b) / 2, model.a4Hz) - peak.at, model);
-    const amplitude = (lower.tone.amplitudes[i] ?? 0) * (upper.tone.amplitudes[j] ?? 0);
-    const mass = amplitude * cloudingAt(y, model.constants) * weight;
-    if (mass > 0)
-      found.push({ meeting: { lowerN: i + 1, upperN: j + 1, differenceHz: Math.abs(a - b) }, mass });
+  const place = AXIS_LOW + axis.step * peak.point;
+  const found: PartialMeeting[] = [];
+  let whole = 0;
+  forEachMeeting(lower, upper, constants.reachErb, (i, j, y) => {
+    const a = lower.frequencies[i] ?? 0;
+    const b = upper.frequencies[j] ?? 0;
+    const weight = windowValue(midiOfFrequency((a + b) / 2, a4Hz) - place, constants.windowSemitones);
+    const amplitude = (lower.amplitudes[i] ?? 0) * (upper.amplitudes[j] ?? 0);
+    const clouding = amplitude * cloudingAt(y, constants) * weight;
+    if (clouding <= 0) return;
+    whole += clouding;
+    keepLargest(found, { lowerN: i + 1, upperN: j + 1, differenceHz: Math.abs(a - b), share: clouding });
   });
-  const whole = found.reduce((sum, { mass }) => sum + mass, 0);
-  return found
-    .map(({ meeting, mass }) => ({ ...meeting, share: mass / whole }))
-    .sort((a, b) => b.share - a.share)
-    .slice(0, MEETINGS_SHOWN);
+  return found.map((meeting) => ({ ...meeting, share: meeting.share / whole }));
 }
 
-function windowAt(distance: number, { constants }: MuddinessModel): number {
-  if (Math.abs(distance) > WINDOW_REACH) return 0;
-  return Math.exp(-WINDOW_EXPONENT * (distance / constants.windowSemitones) ** 2);
+/** Keeps a short list in falling order: most meetings are small and leave it as it is. */
+function keepLargest(list: PartialMeeting[], meeting: PartialMeeting): void {
+  const last = list[MEETINGS_SHOWN - 1];
+  if (last && meeting.share <= last.share) return;
+  list.push(meeting);
+  list.sort((a, b) => b.share - a.share);
+  if (list.length > MEETINGS_SHOWN) list.pop();
 }

@@ -1,61 +1,66 @@
 import { nominalLevel } from '#shared/acoustics/level';
-import { spectrumOf } from '#shared/acoustics/spectrum';
+import type { ToneSource } from '#shared/acoustics/spectrum';
 import { midiOf, midiOfName, parsePitch } from '#shared/pitch/names';
 import { frequencyOf } from '#shared/pitch/tuning';
 import { playersOf } from '#shared/strings/divisi';
 import { harmonicFrequency } from '#shared/strings/harmonics';
-import type { Instrument } from '#shared/strings/sections';
 import { SECTION_FACTS } from '#shared/strings/sections';
 import type { Chord, Voice } from '#shared/study/study.document';
-import type { Decibels, Hertz, Midi } from '#shared/units';
-import type { SoundSettings, VoiceSound } from '#shared/voicing/analysis';
+import type { Decibels, Midi } from '#shared/units';
+import type { Partial, SoundSettings, VoiceSound } from '#shared/voicing/analysis';
 
-/** A voice made to sound, with what the measures need besides. */
-export interface SoundingVoice extends VoiceSound {
-  readonly instrument: Instrument;
-  readonly f0Hz: Hertz;
+/** A voice with what shapes its tone and what its players give: all but its partials. */
+export interface VoiceSource extends ToneSource, Omit<VoiceSound, 'partials'> {
+  /** Tells the shapes of tones apart: equal for equal ones. */
+  readonly toneKey: string;
   /** What the players give before the body shapes it; 0 dB is one violinist at mf. */
   readonly nominalDb: Decibels;
 }
 
+type Sounding = Pick<Chord, 'voices' | 'dynamic'>;
+
 /**
- * Makes the voices of a chord sound: their players, tuning, level and partials.
+ * What makes the voices of a chord sound: players, tuning and level.
  * @param chord any number of voices
  * @param settings tuning and players
- * @returns one sounding voice for each voice, in the same order
- * @throws RangeError where a voice's pitch is not one
+ * @returns one source for each voice, in the same order
+ * @throws RangeError where a voice's pitch, or the tonic, is not a note
  */
-export function soundOf(
-  chord: Pick<Chord, 'voices' | 'dynamic'>,
-  settings: SoundSettings,
-): readonly SoundingVoice[] {
+export function sourcesOf(chord: Sounding, settings: SoundSettings): readonly VoiceSource[] {
   const players = playersOf(chord.voices, settings.ensemble);
-  const bass = chord.voices.reduce<Midi | null>((lowest, voice) => {
-    const midi = midiOfName(voice.pitch);
-    return lowest === null || midi < lowest ? midi : lowest;
-  }, null);
+  const bass = bassOf(chord.voices);
   return chord.voices.map((voice) =>
-    soundVoice(voice, voice.dynamic ?? chord.dynamic, players.get(voice.id) ?? 1, bass, settings),
+    sourceOf(voice, voice.dynamic ?? chord.dynamic, players.get(voice.id) ?? 1, bass, settings),
   );
 }
 
-function soundVoice(
+/** @returns the lowest sounding pitch; null for no voices */
+export function bassOf(voices: readonly Pick<Voice, 'pitch'>[]): Midi | null {
+  return voices.length === 0 ? null : Math.min(...voices.map(({ pitch }) => midiOfName(pitch)));
+}
+
+/**
+ * @param dynamic the voice's own or its chord's
+ * @param players on this voice
+ * @param bass the chord's lowest pitch, to which pure intonation tunes
+ */
+export function sourceOf(
   voice: Voice,
   dynamic: Chord['dynamic'],
   players: number,
   bass: Midi | null,
   settings: SoundSettings,
-): SoundingVoice {
+): VoiceSource {
   const pitch = parsePitch(voice.pitch);
   if (!pitch) throw new RangeError(`not a pitch: ${voice.pitch}`);
+  const { id, section, technique } = voice;
+  const { instrument } = SECTION_FACTS[section];
   const tuning = { a4Hz: settings.a4Hz, intonation: settings.intonation, tonic: settings.key.tonic, bass };
-  const instrument = SECTION_FACTS[voice.section].instrument;
-  const { technique } = voice;
   const f0Hz = harmonicFrequency(voice, settings.ensemble.bass, settings.a4Hz) ?? frequencyOf(pitch, tuning);
-  const nominalDb = nominalLevel(instrument, dynamic, technique, players);
+  const { contact, mute, stroke, harmonic } = technique;
   return {
-    id: voice.id,
-    section: voice.section,
+    id,
+    section,
     pitch: voice.pitch,
     midi: midiOf(pitch),
     players,
@@ -63,10 +68,22 @@ function soundVoice(
     dynamic,
     instrument,
     f0Hz,
-    nominalDb,
-    partials: spectrumOf({ instrument, technique, dynamic, f0Hz }).map((partial) => ({
-      ...partial,
-      levelDb: partial.levelDb + nominalDb,
-    })),
+    toneKey: `${instrument} ${contact} ${String(mute)} ${stroke} ${harmonic} ${dynamic} ${f0Hz}`,
+    nominalDb: nominalLevel(instrument, dynamic, technique, players),
   };
+}
+
+/**
+ * @param source of a voice
+ * @param shape its partials without the voice's level
+ * @returns the voice as it sounds
+ */
+export function soundOf(source: VoiceSource, shape: readonly Partial[]): VoiceSound {
+  const { id, section, pitch, midi, players, technique, dynamic, nominalDb } = source;
+  const partials = shape.map(({ n, frequencyHz, levelDb }) => ({
+    n,
+    frequencyHz,
+    levelDb: levelDb + nominalDb,
+  }));
+  return { id, section, pitch, midi, players, technique, dynamic, partials };
 }

@@ -4,17 +4,20 @@ import type { Midi, Semitones } from '#shared/units';
 export const AXIS_LOW: Midi = 11.5;
 /** E8. */
 export const AXIS_HIGH: Midi = 112;
-/** Farther than this from its centre the window counts as nothing: under one part in 60,000,000. */
-export const WINDOW_REACH: Semitones = 12;
+/** The farthest that any window reaches; masses this far outside the axis still count inside it. */
+const MARGIN: Semitones = 24;
+/** A window counts as nothing where it has fallen under a millionth. */
+const WINDOW_END = 1e-6;
 const EXPONENT = 2;
 
 /** The pitch axis: points at even steps, the registers' edges among them. */
 export interface PitchAxis {
   readonly step: Semitones;
   readonly count: number;
-  /** The window's values at 0, 1, 2 … steps from its centre; 1 at the centre. */
-  readonly window: Float64Array;
 }
+
+/** A window's values at 0, 1, 2 … steps from its centre; 1 at the centre. */
+export type Window = Float64Array;
 
 /** Values along a stretch of the axis; nothing outside it. */
 export interface Profile {
@@ -23,18 +26,11 @@ export interface Profile {
   readonly values: Float64Array;
 }
 
-export const EMPTY_PROFILE: Profile = { from: 0, values: new Float64Array(0) };
+const EMPTY_PROFILE: Profile = { from: 0, values: new Float64Array(0) };
 
-/**
- * @param step 0.5 or 0.25 semitones, so that the registers' edges are points
- * @param windowSemitones where the window has fallen to e^−2
- * @source W(d) = exp(−2 (d / width)²), d in semitones
- */
-export function pitchAxis(step: Semitones, windowSemitones: Semitones): PitchAxis {
-  const reach = Math.round(WINDOW_REACH / step);
-  const window = new Float64Array(reach + 1);
-  for (let i = 0; i <= reach; i += 1) window[i] = Math.exp(-EXPONENT * ((i * step) / windowSemitones) ** 2);
-  return { step, count: Math.round((AXIS_HIGH - AXIS_LOW) / step) + 1, window };
+/** @param step 0.5 or 0.25 semitones, so that the registers' edges are points */
+export function pitchAxis(step: Semitones): PitchAxis {
+  return { step, count: Math.round((AXIS_HIGH - AXIS_LOW) / step) + 1 };
 }
 
 /** @returns the pitch of a point of the axis */
@@ -42,21 +38,35 @@ export function pitchAt(axis: PitchAxis, point: number): Midi {
   return AXIS_LOW + axis.step * point;
 }
 
-/** Gathers masses at pitches and smooths them by the window; kept and used again, so that nothing is allocated. */
+/**
+ * @param width semitones at which the window has fallen to e^−2
+ * @source W(d) = exp(−2 (d / width)²), d in semitones
+ */
+export function windowValue(distance: Semitones, width: Semitones): number {
+  return Math.exp(-EXPONENT * (distance / width) ** 2);
+}
+
+/** @returns the window on an axis, up to where it counts as nothing */
+export function windowOn({ step }: PitchAxis, width: Semitones): Window {
+  const reach = Math.min(width * Math.sqrt(-Math.log(WINDOW_END) / EXPONENT), MARGIN);
+  return Float64Array.from({ length: Math.ceil(reach / step) + 1 }, (_, i) => windowValue(i * step, width));
+}
+
+/** Gathers masses at pitches and smooths them; used again and again, so that adding allocates nothing. */
 export interface Deposit {
   readonly add: (pitch: Midi, mass: number) => void;
-  /** Smooths what was added since the last time and starts anew. */
-  readonly smooth: () => Profile;
+  /** Smooths what was added since the last time by a window and starts anew. */
+  readonly smooth: (window: Window, scale: number) => Profile;
 }
 
 /** @returns a deposit on an axis; masses go linearly onto the two nearest points */
 export function depositOn(axis: PitchAxis): Deposit {
-  const reach = axis.window.length - 1;
-  const masses = new Float64Array(axis.count + 2 * reach);
+  const margin = Math.round(MARGIN / axis.step);
+  const masses = new Float64Array(axis.count + 2 * margin);
   let first = masses.length;
   let last = -1;
   const add = (pitch: Midi, mass: number): void => {
-    const place = (pitch - AXIS_LOW) / axis.step + reach;
+    const place = (pitch - AXIS_LOW) / axis.step + margin;
     const below = Math.floor(place);
     if (below < 0 || below + 1 >= masses.length) return;
     const part = place - below;
@@ -65,10 +75,9 @@ export function depositOn(axis: PitchAxis): Deposit {
     if (below < first) first = below;
     if (below + 1 > last) last = below + 1;
   };
-  const smooth = (): Profile => {
-    if (last < 0) return EMPTY_PROFILE;
-    const profile = smoothed(masses, first, last, axis);
-    masses.fill(0, first, last + 1);
+  const smooth = (window: Window, scale: number): Profile => {
+    const profile = smoothed(masses, { first, last, margin, scale }, axis, window);
+    if (last >= 0) masses.fill(0, first, last + 1);
     first = masses.length;
     last = -1;
     return profile;
@@ -76,21 +85,35 @@ export function depositOn(axis: PitchAxis): Deposit {
   return { add, smooth };
 }
 
-function smoothed(masses: Float64Array, first: number, last: number, axis: PitchAxis): Profile {
-  const reach = axis.window.length - 1;
-  const from = Math.max(first - 2 * reach, 0);
-  const to = Math.min(last, axis.count - 1);
-  const values = new Float64Array(Math.max(to - from + 1, 0));
+interface Stretch {
+  readonly first: number;
+  readonly last: number;
+  readonly margin: number;
+  readonly scale: number;
+}
+
+function smoothed(masses: Float64Array, stretch: Stretch, axis: PitchAxis, window: Window): Profile {
+  const { first, last, margin, scale } = stretch;
+  const reach = window.length - 1;
+  const from = Math.max(first - margin - reach, 0);
+  const to = Math.min(last - margin + reach, axis.count - 1);
+  if (to < from) return EMPTY_PROFILE;
+  const values = new Float64Array(to - from + 1);
   for (let source = first; source <= last; source += 1) {
-    const mass = masses[source] ?? 0;
+    const mass = (masses[source] ?? 0) * scale;
     if (mass === 0) continue;
-    const centre = source - reach;
-    const low = Math.max(centre - reach, from);
+    const centre = source - margin;
     const high = Math.min(centre + reach, to);
-    for (let point = low; point <= high; point += 1) {
-      const weight = axis.window[Math.abs(point - centre)] ?? 0;
+    for (let point = Math.max(centre - reach, from); point <= high; point += 1) {
+      const weight = window[point > centre ? point - centre : centre - point] ?? 0;
       values[point - from] = (values[point - from] ?? 0) + mass * weight;
     }
   }
   return { from, values };
+}
+
+/** Adds a profile, scaled, to a sum along the whole axis. */
+export function addProfile(sum: Float64Array, { from, values }: Profile, scale: number): void {
+  const { length } = values;
+  for (let i = 0; i < length; i += 1) sum[from + i] = (sum[from + i] ?? 0) + scale * (values[i] ?? 0);
 }

@@ -6,22 +6,24 @@ export interface MuddinessConstants {
   readonly peakErb: number;
   /** s: how sharply the clouding falls away from there. */
   readonly sharpness: number;
+  /** Beyond this many equivalent rectangular bandwidths two partials no longer cloud each other. */
+  readonly reachErb: number;
   /** c: within about this many bandwidths partials fuse instead of beating. */
   readonly fusionErb: number;
   /** κ: how much fusing partials clear a pair of voices. */
   readonly fusionStrength: number;
   /** m: 1 adds all pairs of voices, more lets the cloudiest govern. */
   readonly pooling: number;
-  /** β: how fully the clouding is measured against what sounds at the place. */
-  readonly localExponent: number;
   /** ε: how much the voices around count for what sounds at the place. */
   readonly floor: number;
   /** f_c: from here up the same roughness is harsh rather than muddy. */
   readonly cornerHz: Hertz;
   /** q: how fast it turns. */
   readonly slope: number;
-  /** Width of the smooth window along the pitch axis. */
+  /** Width of the smooth window over the clouding. */
   readonly windowSemitones: Semitones;
+  /** Width of the smooth window over what sounds at the place. */
+  readonly localWindowSemitones: Semitones;
   /** T: the clouding that scores 50. */
   readonly threshold: number;
 }

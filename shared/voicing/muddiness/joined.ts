@@ -1,8 +1,9 @@
+import { spectrumOf } from '#shared/acoustics/spectrum';
 import type { Decibels, Hertz } from '#shared/units';
 import type { Partial } from '#shared/voicing/analysis';
 import type { MuddinessVoice } from '#shared/voicing/muddiness/model';
 import { toneOf } from '#shared/voicing/muddiness/tones';
-import type { SoundingVoice } from '#shared/voicing/sound';
+import type { VoiceSource } from '#shared/voicing/sound';
 
 const DB_PER_POWER_DECADE = 10;
 /** Fundamentals nearer than this, as a ratio, are one pitch: far under what any tuning here can differ by. */
@@ -15,11 +16,23 @@ export interface JoinedVoice extends MuddinessVoice {
 }
 
 /** A voice by what joining needs. */
-export type Joinable = Pick<SoundingVoice, 'f0Hz' | 'nominalDb' | 'partials'>;
+export type Joinable = Pick<
+  VoiceSource,
+  'toneKey' | 'f0Hz' | 'nominalDb' | 'instrument' | 'technique' | 'dynamic'
+>;
 
 /** @returns the power of a level: 1 at 0 dB */
 export function powerOf(level: Decibels): number {
   return 10 ** (level / DB_PER_POWER_DECADE);
+}
+
+/** @returns a voice that stands alone, as the index hears it */
+export function muddinessVoice(voice: Joinable, a4Hz: Hertz): MuddinessVoice {
+  return {
+    key: voice.toneKey,
+    makeTone: () => toneOf(spectrumOf(voice), a4Hz),
+    energy: powerOf(voice.nominalDb),
+  };
 }
 
 /**
@@ -30,37 +43,59 @@ export function powerOf(level: Decibels): number {
  */
 export function joinUnisons(voices: readonly Joinable[], a4Hz: Hertz): readonly JoinedVoice[] {
   const rising = voices.map((voice, index) => ({ voice, index })).sort((a, b) => a.voice.f0Hz - b.voice.f0Hz);
-  const groups: { voice: Joinable; index: number }[][] = [];
+  const groups: Member[][] = [];
   for (const entry of rising) {
     const group = groups.at(-1);
-    const same = group?.[0] && entry.voice.f0Hz - group[0].voice.f0Hz < SAME_PITCH * entry.voice.f0Hz;
-    if (group && same) group.push(entry);
+    const first = group?.[0];
+    if (group && first && inUnison(first.voice, entry.voice)) group.push(entry);
     else groups.push([entry]);
   }
   return groups.map((group) => joined(group, a4Hz));
 }
 
-function joined(group: readonly { voice: Joinable; index: number }[], a4Hz: Hertz): JoinedVoice {
+/** @returns whether two voices sound one pitch */
+export function inUnison(a: Pick<Joinable, 'f0Hz'>, b: Pick<Joinable, 'f0Hz'>): boolean {
+  return Math.abs(a.f0Hz - b.f0Hz) < SAME_PITCH * b.f0Hz;
+}
+
+interface Member {
+  readonly voice: Joinable;
+  readonly index: number;
+}
+
+function joined(group: readonly Member[], a4Hz: Hertz): JoinedVoice {
+  const [first] = group;
   const energy = group.reduce((sum, { voice }) => sum + powerOf(voice.nominalDb), 0);
   const members = group.map(({ voice, index }) => ({ index, part: powerOf(voice.nominalDb) / energy }));
-  const only = group.length === 1 ? group[0] : undefined;
-  const partials = only ? only.voice.partials : jointPartials(group.map(({ voice }) => voice));
-  return { tone: toneOf(partials, a4Hz), energy, members };
+  const alike = new Set(group.map(({ voice }) => voice.toneKey)).size === 1;
+  if (first && alike) return { ...muddinessVoice(first.voice, a4Hz), energy, members };
+  const voices = group.map(({ voice }) => voice);
+  return { key: mixedKey(voices), makeTone: () => toneOf(jointPartials(voices), a4Hz), energy, members };
+}
+
+/** Unlike shapes in unison make a shape of their own, told by how loud each is. */
+function mixedKey(voices: readonly Joinable[]): string {
+  const loudest = Math.max(...voices.map(({ nominalDb }) => nominalDb));
+  return voices
+    .map(({ toneKey, nominalDb }) => `${toneKey} ${nominalDb - loudest}`)
+    .sort()
+    .join(' + ');
 }
 
 /** Energies of shapes, each scaled to its voice's nominal power, added partial by partial. */
 function jointPartials(voices: readonly Joinable[]): readonly Partial[] {
-  const powers = new Map<number, Partial & { power: number }>();
-  for (const { partials, nominalDb } of voices) {
+  const powers = new Map<number, { frequencyHz: Hertz; power: number }>();
+  for (const voice of voices) {
+    const partials = spectrumOf(voice);
     const whole = partials.reduce((sum, { levelDb }) => sum + powerOf(levelDb), 0);
-    for (const partial of partials) {
-      const power = (powerOf(nominalDb) * powerOf(partial.levelDb)) / whole;
-      powers.set(partial.n, { ...partial, power: power + (powers.get(partial.n)?.power ?? 0) });
+    for (const { n, frequencyHz, levelDb } of partials) {
+      const power = (powerOf(voice.nominalDb) * powerOf(levelDb)) / whole;
+      powers.set(n, { frequencyHz, power: power + (powers.get(n)?.power ?? 0) });
     }
   }
-  return [...powers.values()]
-    .sort((a, b) => a.n - b.n)
-    .map(({ n, frequencyHz, power }) => ({
+  return [...powers]
+    .sort(([a], [b]) => a - b)
+    .map(([n, { frequencyHz, power }]) => ({
       n,
       frequencyHz,
       levelDb: DB_PER_POWER_DECADE * Math.log10(power),

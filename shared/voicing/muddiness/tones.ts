@@ -4,19 +4,21 @@ import type { Hertz, Midi } from '#shared/units';
 import type { Partial } from '#shared/voicing/analysis';
 import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
 
-/** Beyond this many equivalent rectangular bandwidths two partials no longer cloud each other. */
-export const CLOUDING_REACH_ERB = 2.2;
 const DB_PER_AMPLITUDE_DECADE = 20;
 
 /** The shape of a voice's sound: its partials scaled so that the squares of their amplitudes add up to 1. */
 export interface Tone {
+  /** Its partials, without the level of the voice that sounds it. */
+  readonly partials: readonly Partial[];
   readonly fundamental: Midi;
   readonly frequencies: Float64Array;
   readonly amplitudes: Float64Array;
+  /** Where the partials lie on the pitch axis. */
+  readonly pitches: Float64Array;
 }
 
 /**
- * @param partials rising in frequency; their common level drops out
+ * @param partials rising in frequency, at least one; their common level drops out
  * @param a4Hz places the tone on the pitch axis
  */
 export function toneOf(partials: readonly Partial[], a4Hz: Hertz): Tone {
@@ -24,20 +26,22 @@ export function toneOf(partials: readonly Partial[], a4Hz: Hertz): Tone {
   const amplitudes = Float64Array.from(partials, ({ levelDb }) => 10 ** (levelDb / DB_PER_AMPLITUDE_DECADE));
   const scale = 1 / Math.sqrt(amplitudes.reduce((sum, a) => sum + a * a, 0));
   return {
+    partials,
     fundamental: midiOfFrequency(frequencies[0] ?? 0, a4Hz),
     frequencies,
     amplitudes: amplitudes.map((a) => a * scale),
+    pitches: frequencies.map((frequency) => midiOfFrequency(frequency, a4Hz)),
   };
 }
 
 /**
  * How much two partials cloud each other.
  * @param y their difference in equivalent rectangular bandwidths at their mean
- * @returns 0 … 1, 1 at the peak
+ * @returns 0 … 1, 1 at the peak, 0 from the reach on
  * @source g(y) = ((y/p) exp(1 − y/p))^s, after the form of Parncutt's curve for Hutchinson & Knopoff 1978
  */
-export function cloudingAt(y: number, { peakErb, sharpness }: MuddinessConstants): number {
-  if (y >= CLOUDING_REACH_ERB) return 0;
+export function cloudingAt(y: number, { peakErb, sharpness, reachErb }: MuddinessConstants): number {
+  if (y >= reachErb) return 0;
   const base = (y / peakErb) * Math.exp(1 - y / peakErb);
   return sharpness === 1 ? base : base ** sharpness;
 }

@@ -1,0 +1,94 @@
+import { COMMON_PRACTICE_ORDERINGS } from '#shared/data/common-practice-orderings';
+import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
+import {
+  CLEAR_TRIAD,
+  CLOSE_LOW_CHORDS,
+  MIDDLE_TRIAD,
+  OPEN_CHORDS,
+  PASSING_CHORDS,
+} from '#shared/data/model-chords';
+import { MUDDY_REGISTERS, REGISTER_RATINGS } from '#shared/data/register-ratings';
+import { SCORE_CHORDS } from '#shared/data/score-chords';
+import { correlation } from '#shared/voicing/calibration/statistics';
+import { limitCurves } from '#shared/voicing/calibration/limit-curves';
+import type { LimitFit } from '#shared/voicing/calibration/threshold';
+import { fitThreshold } from '#shared/voicing/calibration/threshold';
+import {
+  CALIBRATION_A4,
+  namedVoicing,
+  scoreVoicing,
+  voicingOf,
+} from '#shared/voicing/calibration/yardsticks';
+import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
+import type { MuddinessVoice } from '#shared/voicing/muddiness/model';
+import { muddinessModel } from '#shared/voicing/muddiness/model';
+import { AXIS_STEP } from '#shared/voicing/muddiness/models';
+import { indexOf, peakDensity } from '#shared/voicing/muddiness/scores';
+
+/** How a set of constants does by every yardstick. */
+export interface Judgement {
+  readonly constants: MuddinessConstants;
+  readonly limits: LimitFit;
+  /** By how much each ordering of common practice holds: 1 where just as far as it must. */
+  readonly orderings: readonly number[];
+  /** Pearson's r between the index and the listeners' ratings. */
+  readonly correlation: number;
+  readonly scoreChords: readonly number[];
+  readonly openChords: readonly number[];
+  readonly closeChords: readonly number[];
+  readonly passingChords: readonly number[];
+  readonly clearTriad: number;
+  readonly middleTriad: number;
+}
+
+/** Constants before the threshold is found. */
+export type Untuned = Omit<MuddinessConstants, 'threshold'>;
+
+/** Where both of an ordering score over this, the index saturates and ρ is compared instead. */
+const SATURATED = 90;
+/** There the muddier must lie this much higher in ρ. */
+const SATURATED_MARGIN = 0.02;
+
+/**
+ * Judges constants by the chart, the orderings, the ratings, real chords and made ones; the threshold is fitted
+ * to the chart alone.
+ */
+export function judge(untuned: Untuned): Judgement {
+  const model = muddinessModel({ ...untuned, threshold: 1 }, CALIBRATION_A4, AXIS_STEP);
+  const limits = fitThreshold(limitCurves(model, LOW_INTERVAL_LIMITS));
+  const density = (voices: readonly MuddinessVoice[]) => peakDensity(model, voices);
+  const index = (voices: readonly MuddinessVoice[]) => indexOf(density(voices), limits.threshold);
+  const rated = REGISTER_RATINGS.filter(({ register }) => register <= MUDDY_REGISTERS);
+  return {
+    constants: { ...untuned, threshold: limits.threshold },
+    limits,
+    orderings: COMMON_PRACTICE_ORDERINGS.map(({ muddier, clearer }) =>
+      orderingMargin(
+        density(namedVoicing(muddier.join(' '))),
+        density(namedVoicing(clearer.join(' '))),
+        limits.threshold,
+      ),
+    ),
+    correlation: correlation(
+      rated.map(({ midi }) => index(voicingOf(midi))),
+      rated.map(({ rating }) => rating),
+    ),
+    scoreChords: SCORE_CHORDS.map((chord) => index(scoreVoicing(chord))),
+    openChords: OPEN_CHORDS.map((chord) => index(namedVoicing(chord))),
+    closeChords: CLOSE_LOW_CHORDS.map((chord) => index(namedVoicing(chord))),
+    passingChords: PASSING_CHORDS.map((chord) => index(namedVoicing(chord))),
+    clearTriad: index(namedVoicing(CLEAR_TRIAD)),
+    middleTriad: index(namedVoicing(MIDDLE_TRIAD)),
+  };
+}
+
+/**
+ * How far an ordering holds.
+ * @returns 1 where just far enough: a point of the index, or 2 % of ρ where both are over 90
+ */
+export function orderingMargin(muddier: number, clearer: number, threshold: number): number {
+  const a = indexOf(muddier, threshold);
+  const b = indexOf(clearer, threshold);
+  const saturated = a > SATURATED && b > SATURATED;
+  return saturated ? (muddier / clearer - 1) / SATURATED_MARGIN : a - b;
+}

@@ -1,0 +1,82 @@
+import { FORTE_POWER_LEVEL } from '#shared/data/player-levels';
+import type { ScoreChord } from '#shared/data/score-chords';
+import { midiOfName } from '#shared/pitch/names';
+import { equalTempered } from '#shared/pitch/tuning';
+import type { Instrument, Section } from '#shared/strings/sections';
+import { SECTION_FACTS } from '#shared/strings/sections';
+import type { Ensemble, Technique } from '#shared/study/study.document';
+import { DEFAULT_ENSEMBLE } from '#shared/study/study.document';
+import type { Hertz, Midi } from '#shared/units';
+import { playersGain } from '#shared/acoustics/level';
+import type { Joinable } from '#shared/voicing/muddiness/joined';
+import { joinUnisons } from '#shared/voicing/muddiness/joined';
+import type { MuddinessVoice } from '#shared/voicing/muddiness/model';
+
+/** The tables were made for concert pitch. */
+export const CALIBRATION_A4: Hertz = 440;
+/** Sections of one size, so that no balance colours the yardsticks. */
+const PLAYERS = 8;
+
+const ORDINARY: Technique = { contact: 'ordinary', mute: false, stroke: 'sustained', harmonic: 'none' };
+
+/** The lowest keys of the octaves 2, 3 and 4. */
+const C2: Midi = 36;
+const C3: Midi = 48;
+const C4: Midi = 60;
+
+/** The section that takes a note where a yardstick names none: basses, cellos, violas, violins by octaves. */
+export function sectionFor(midi: Midi): Section {
+  if (midi < C2) return 'doubleBass';
+  if (midi < C3) return 'cello';
+  return midi < C4 ? 'viola' : 'violin1';
+}
+
+/** A section's note, bowed ordinarily at mf in equal temperament. */
+function noteOf(instrument: Instrument, midi: Midi, players: number): Joinable {
+  const f0Hz = equalTempered(midi, CALIBRATION_A4);
+  return {
+    toneKey: `${instrument} ordinary mf ${f0Hz}`,
+    f0Hz,
+    instrument,
+    technique: ORDINARY,
+    dynamic: 'mf',
+    nominalDb: FORTE_POWER_LEVEL[instrument] - FORTE_POWER_LEVEL.violin + playersGain(players),
+  };
+}
+
+/**
+ * Two like cello sections, whose spectrum is continued below their range.
+ * @param lower sounding pitch of the lower one
+ */
+export function twoCelloSections(lower: Midi, semitones: number): readonly MuddinessVoice[] {
+  const notes = [lower, lower + semitones].map((midi) => noteOf('cello', midi, PLAYERS));
+  return joinUnisons(notes, CALIBRATION_A4);
+}
+
+/** A voicing of one section a note, each of eight players. */
+export function voicingOf(midi: readonly Midi[]): readonly MuddinessVoice[] {
+  const notes = midi.map((note) => noteOf(SECTION_FACTS[sectionFor(note)].instrument, note, PLAYERS));
+  return joinUnisons(notes, CALIBRATION_A4);
+}
+
+/** The same from names: `C2 G2 E3`. */
+export function namedVoicing(names: string): readonly MuddinessVoice[] {
+  return voicingOf(names.split(' ').map(midiOfName));
+}
+
+/** A chord of a score: the notes of one part share its players. */
+export function scoreVoicing(
+  chord: ScoreChord,
+  ensemble: Ensemble = DEFAULT_ENSEMBLE,
+): readonly MuddinessVoice[] {
+  const notes = chord.parts.flatMap(([section, pitches]) =>
+    pitches.map((pitch) =>
+      noteOf(
+        SECTION_FACTS[section].instrument,
+        midiOfName(pitch),
+        ensemble.players[section] / pitches.length,
+      ),
+    ),
+  );
+  return joinUnisons(notes, CALIBRATION_A4);
+}
