@@ -1,6 +1,5 @@
 import { cpSync, existsSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { basename, join } from 'node:path';
-import { fileURLToPath } from 'node:url';
 import { DIST, pointCurrentAt, isCurrent, prune, UNFINISHED } from './builds.mjs';
 import { CannotSetUp, say } from './report.mjs';
 import { ROOT, sourcesBelow, sourcesHash } from './sources.mjs';
@@ -67,5 +66,3 @@ export async function makeBuild() {
   }
   throw new CannotSetUp('the sources changed each time while they were being built.');
 }
-
-if (process.argv[1] === fileURLToPath(import.meta.url)) await makeBuild();

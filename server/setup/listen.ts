@@ -25,6 +25,11 @@ export async function listen(app: RequestListener, host: string, port: number): 
   }
 }
 
+/** Tells of an address that cannot be had before anything else is made. @throws {CannotStart} */
+export async function checkAddress(host: string, port: number): Promise<void> {
+  await closeServer(await listen(() => undefined, host, port), 0);
+}
+
 /** Takes no more requests, lets those under way finish, and ends what is left when patience is over. */
 export async function closeServer(server: Server, patienceMs: number): Promise<void> {
   const deadline = Date.now() + patienceMs;

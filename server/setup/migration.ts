@@ -3,6 +3,7 @@ import { drizzle } from 'drizzle-orm/mysql2';
 import { migrate } from 'drizzle-orm/mysql2/migrator';
 import { createConnection, type Connection, type RowDataPacket } from 'mysql2/promise';
 import { connectionOptions, type DatabaseAccess } from '#server/db/access';
+import { CannotStart } from '#server/setup/data-folder';
 import { migrationsFolder } from '#server/setup/product';
 
 const LOCK_NAME = 'siltline.migration';
@@ -15,13 +16,25 @@ const LOCK_WAIT_S = 120;
  */
 export async function migrateDatabase(access: DatabaseAccess): Promise<void> {
   if (!existsSync(migrationsFolder)) throw new Error(`There are no migrations in ${migrationsFolder}.`);
-  const connection = await createConnection(connectionOptions(access));
+  const connection = await connect(access);
   try {
     await lockMigrations(connection);
     await migrate(drizzle({ client: connection }), { migrationsFolder });
   } finally {
     // Ends the session, and with it the lock.
     await connection.end();
+  }
+}
+
+/** @throws {CannotStart} naming the database, without its password. */
+async function connect(access: DatabaseAccess): Promise<Connection> {
+  try {
+    return await createConnection(connectionOptions(access));
+  } catch (error) {
+    const code = error instanceof Error && 'code' in error ? String(error.code) : String(error);
+    const place = access.socketPath ?? `${access.host}:${access.port}`;
+    const whom = `${access.user} of ${access.database} at ${place}`;
+    throw new CannotStart(`The database cannot be reached as ${whom} (${code}).`, { cause: error });
   }
 }
 

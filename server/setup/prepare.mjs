@@ -17,6 +17,7 @@ const ownDatabase = () => (process.env.DATABASE_URL ? [] : [program(MARIADB)]);
 const STEPS = {
   start: () => [dependencies, ...ownDatabase(), build],
   dev: () => [dependencies, ...ownDatabase()],
+  build: () => [dependencies, build],
   test: () => [dependencies, program(MARIADB), program(CHROMIUM), build],
 };
 

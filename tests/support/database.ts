@@ -1,23 +1,15 @@
-import type { Pool, RowDataPacket } from 'mysql2/promise';
-import { inject, onTestFinished } from 'vitest';
-import { openDb, openPool, type Db } from '#server/db/connection';
+import type { RowDataPacket } from 'mysql2/promise';
+import { afterAll, inject } from 'vitest';
+import { openDb, openPool } from '#server/db/connection';
 
-/** A database without a row, and the connections to it. They close when the test is over. */
-export interface TestDatabase {
-  readonly pool: Pool;
-  readonly db: Db;
-}
+/** The API tests' database, with the rights that the program has when it runs. */
+export const pool = openPool(inject('database').app);
+export const db = openDb(pool);
 
-/** Empties the API tests' database and opens it with the rights that the program has when it runs. */
-export async function openTestDatabase(): Promise<TestDatabase> {
-  await emptyTables();
-  const pool = openPool(inject('database').app);
-  onTestFinished(() => pool.end());
-  return { pool, db: openDb(pool) };
-}
+afterAll(() => pool.end());
 
-async function emptyTables(): Promise<void> {
-  const pool = openPool(inject('database').migration);
+/** Removes every row; what each test needs it makes itself. */
+export async function emptyTables(): Promise<void> {
   const connection = await pool.getConnection();
   try {
     const [tables] = await connection.query<RowDataPacket[]>(
@@ -26,7 +18,7 @@ async function emptyTables(): Promise<void> {
     await connection.query('SET foreign_key_checks = 0');
     for (const { name } of tables) await connection.query('DELETE FROM ??', [name]);
   } finally {
+    // It would check no foreign keys for whoever got it next.
     connection.destroy();
-    await pool.end();
   }
 }

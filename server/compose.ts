@@ -1,0 +1,47 @@
+import type { Logger } from 'pino';
+import { createPasswords } from '#server/accounts/passwords';
+import { openDb, openPool, type Db } from '#server/db/connection';
+import { accounts } from '#server/db/schema/accounts';
+import { seedDemo } from '#server/demo/seed';
+import type { Deps } from '#server/deps';
+import type { Env, Settings } from '#server/env';
+import { startFakeSmtp } from '#server/mail/fake-smtp';
+import { startMailSender } from '#server/mail/mail-sender';
+import { openTransport } from '#server/mail/transport';
+import type { Closing } from '#server/setup/closing';
+import { openDatabase } from '#server/setup/database';
+import { migrateDatabase } from '#server/setup/migration';
+
+const clock = () => new Date();
+
+/** Puts together what the program works with, in the order in which one needs the other. */
+export async function composeDeps(settings: Settings, log: Logger, closing: Closing): Promise<Deps> {
+  const database = await openDatabase(settings, log);
+  closing.add(database.stop);
+  await migrateDatabase(database.migration);
+  const pool = openPool(database.app);
+  closing.add(() => pool.end());
+  const db = openDb(pool);
+  const smtpUrl = settings.smtpUrl ?? (await startDemoMail(db, closing));
+  const env: Env = { ...settings, smtpUrl, sessionSecret: database.sessionSecret };
+  const passwords = createPasswords();
+  closing.add(passwords.close);
+  const transport = openTransport(smtpUrl);
+  const mailer = startMailSender({ db, log, clock, transport, mailFrom: env.mailFrom });
+  closing.add(mailer.stop);
+  const deps: Deps = { env, db, pool, log, mailer, passwords, clock };
+  if (env.mode === 'demo' && (await isEmpty(db))) await seedDemo(deps);
+  return deps;
+}
+
+/** In the demo mail is sent as it would be, but to a server that shows it and delivers nothing. */
+async function startDemoMail(db: Db, closing: Closing): Promise<string> {
+  const { url, close } = await startFakeSmtp(db, clock);
+  closing.add(close);
+  return url;
+}
+
+async function isEmpty(db: Db): Promise<boolean> {
+  const anybody = await db.select({ id: accounts.id }).from(accounts).limit(1);
+  return anybody.length === 0;
+}

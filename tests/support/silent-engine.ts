@@ -1,0 +1,60 @@
+import type { TimedSound } from '@/audio/schedule';
+import type { SoundEngine, SoundState } from '@/audio/sound-engine';
+import type { Section } from '#shared/strings/sections';
+import type { VoiceSound } from '#shared/voicing/analysis';
+
+/** A sound engine without a loudspeaker: it remembers what it was told. */
+export class SilentEngine implements SoundEngine {
+  state: SoundState = 'silent';
+  held: readonly VoiceSound[] = [];
+  schedule: readonly TimedSound[] = [];
+  loudest = NaN;
+  sections: readonly Section[] | null = null;
+  volume = NaN;
+  head: string | null = null;
+  woken = 0;
+  silenced = 0;
+
+  async hold(sounds: readonly VoiceSound[], loudest: number): Promise<void> {
+    this.held = sounds;
+    this.loudest = loudest;
+    this.state = 'held';
+  }
+
+  async play(schedule: readonly TimedSound[], loudest: number): Promise<void> {
+    this.schedule = schedule;
+    this.loudest = loudest;
+    this.state = 'playing';
+  }
+
+  stop(): void {
+    this.held = [];
+    this.schedule = [];
+    this.state = 'silent';
+  }
+
+  silence(): void {
+    this.silenced += 1;
+    this.stop();
+  }
+
+  setSections(heard: readonly Section[]): void {
+    this.sections = heard;
+  }
+
+  setVolume(volume: number): void {
+    this.volume = volume;
+  }
+
+  peak(): number {
+    return this.state === 'silent' ? -Infinity : -12;
+  }
+
+  playhead(): string | null {
+    return this.head;
+  }
+
+  async wake(): Promise<void> {
+    this.woken += 1;
+  }
+}
