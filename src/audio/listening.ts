@@ -14,6 +14,14 @@ export type Listening =
 
 export const WHOLE_CHORD: Listening = { kind: 'chord' };
 
+/** @returns whether two of them are the same part of the chord */
+export function sameListening(a: Listening, b: Listening): boolean {
+  if (a.kind === 'pair' && b.kind === 'pair') return a.lowerId === b.lowerId && a.upperId === b.upperId;
+  if (a.kind === 'register' && b.kind === 'register') return a.register === b.register;
+  if (a.kind === 'voice' && b.kind === 'voice') return a.id === b.id;
+  return a.kind === 'chord' && b.kind === 'chord';
+}
+
 /** Sections heard alone, and sections left out. */
 export interface Mix {
   readonly solo: readonly Section[];

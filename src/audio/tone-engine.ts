@@ -1,7 +1,8 @@
 import { Context, getContext, setContext } from 'tone';
-import { CROSSFADE, envelopeOf, type Envelope } from '@/audio/envelope';
+import { soundsAlike } from '@/audio/alike';
+import { CROSSFADE, envelopeOf } from '@/audio/envelope';
 import { scaleFor } from '@/audio/levels';
-import { startLine, type Line } from '@/audio/line';
+import { prepareLine, type Line } from '@/audio/line';
 import { buildMaster, type Master } from '@/audio/master';
 import { endOf, sounding, startingBetween, type TimedSound } from '@/audio/schedule';
 import type { SoundEngine, SoundState } from '@/audio/sound-engine';
@@ -13,12 +14,13 @@ import type { Decibels } from '#shared/units';
 const HORIZON = 1.5;
 const PUMP_MILLISECONDS = 50;
 /**
- * Ten milliseconds between an order and its sound, so that a key is answered at once. Tone's own ticking
- * moves nothing here: it is as seldom as may be, and without a worker made from a blob.
+ * Two hundredths of a second between an order and its sound: a key is answered at once, and no order comes too
+ * late for its moment. Tone's own ticking moves nothing here: it is as seldom as may be, and without a worker
+ * made from a blob.
  */
 const CLOCK = {
   latencyHint: 'interactive',
-  lookAhead: 0.01,
+  lookAhead: 0.02,
   updateInterval: 1,
   clockSource: 'timeout',
 } as const;
@@ -45,26 +47,26 @@ class ToneEngine implements SoundEngine {
   async hold(sounds: readonly VoiceSound[], loudest: Decibels): Promise<void> {
     if (!(await this.awake())) return;
     if (this.state === 'playing') this.stop();
+    const changed = sounds.filter((sound) => !this.isHeld(sound));
+    const entering = changed.map((sound) => this.prepare(sound));
     const now = getContext().now();
-    this.master.setScale(scaleFor(loudest), now, this.anySounding(now));
+    this.rescale(loudest, now);
     this.state = 'held';
-    const ids = new Set(sounds.map(({ id }) => id));
-    this.held.forEach((line, id) => {
-      if (!ids.has(id)) this.letGo(id, line, now, envelopeOf(line.sound.technique));
-    });
-    sounds.forEach((sound) => this.holdVoice(sound, now));
+    this.leaveOthers(sounds, now);
+    entering.forEach((line) => this.enter(line, now));
     this.pump();
   }
 
   async play(schedule: readonly TimedSound[], loudest: Decibels): Promise<void> {
     if (!(await this.awake())) return;
     this.end(null);
-    const now = getContext().now();
-    this.master.setScale(scaleFor(loudest), now, this.anySounding(now));
     this.schedule = schedule;
-    this.beganAt = now;
-    this.handedOver = 0;
+    const first = this.prepared(startingBetween(schedule, 0, HORIZON));
+    this.beganAt = getContext().now();
+    this.handedOver = HORIZON;
+    this.rescale(loudest, this.beganAt);
     this.state = 'playing';
+    first.forEach((begin) => begin());
     this.pump();
   }
 
@@ -111,26 +113,38 @@ class ToneEngine implements SoundEngine {
     return getContext().immediate() - this.beganAt;
   }
 
-  private anySounding(now: number): boolean {
-    return this.lines.some((line) => line.endsAt > now);
+  /** In silence the scale is set at once; while something sounds it glides. */
+  private rescale(loudest: Decibels, now: number): void {
+    const glide = this.lines.some((line) => line.beganBefore(now) && line.endsAt > now);
+    this.master.setScale(scaleFor(loudest), now, glide);
   }
 
-  private start(sound: VoiceSound, at: number, envelope: Envelope): Line {
-    const line = startLine({ sound, into: this.master.seat(sound.section), at, envelope });
+  private prepare(sound: VoiceSound): Line {
+    const line = prepareLine(sound, this.master.seat(sound.section));
     this.lines.push(line);
     return line;
   }
 
-  private holdVoice(sound: VoiceSound, now: number): void {
-    const before = this.held.get(sound.id);
-    if (before && soundsAlike(before.sound, sound)) return;
-    if (before) this.letGo(sound.id, before, now, CROSSFADE);
-    this.held.set(sound.id, this.start(sound, now, before ? CROSSFADE : envelopeOf(sound.technique)));
+  private isHeld(sound: VoiceSound): boolean {
+    const line = this.held.get(sound.id);
+    return line !== undefined && soundsAlike(line.sound, sound);
   }
 
-  private letGo(id: string, line: Line, now: number, { release }: Envelope): void {
-    line.release(now, release);
-    this.held.delete(id);
+  private leaveOthers(sounds: readonly VoiceSound[], now: number): void {
+    const staying = new Set(sounds.map(({ id }) => id));
+    this.held.forEach((line, id) => {
+      if (staying.has(id)) return;
+      line.release(now, envelopeOf(line.sound.technique).release);
+      this.held.delete(id);
+    });
+  }
+
+  /** A note takes the place of the one that its voice held before, or begins as a player would. */
+  private enter(line: Line, now: number): void {
+    const before = this.held.get(line.sound.id);
+    before?.release(now, CROSSFADE.release);
+    line.begin(now, before ? CROSSFADE : envelopeOf(line.sound.technique));
+    this.held.set(line.sound.id, line);
   }
 
   private end(seconds: number | null): void {
@@ -157,28 +171,25 @@ class ToneEngine implements SoundEngine {
 
   private handOver(): void {
     const until = this.elapsed() + HORIZON;
-    for (const entry of startingBetween(this.schedule, this.handedOver, until)) {
-      const at = this.beganAt + entry.startSeconds;
-      for (const sound of entry.sounds) {
-        const envelope = envelopeOf(sound.technique);
-        this.start(sound, at, envelope).release(at + entry.seconds, envelope.release);
-      }
-    }
-    this.handedOver = until;
+    const next = startingBetween(this.schedule, this.handedOver, until);
+    this.handedOver = Math.max(this.handedOver, until);
+    this.prepared(next).forEach((begin) => begin());
     if (this.elapsed() >= endOf(this.schedule)) this.state = 'silent';
   }
-}
 
-function soundsAlike(a: VoiceSound, b: VoiceSound): boolean {
-  return (
-    a === b ||
-    (a.section === b.section &&
-      a.partials.length === b.partials.length &&
-      a.partials.every(({ frequencyHz, levelDb }, index) => {
-        const other = b.partials[index];
-        return other?.frequencyHz === frequencyHz && other.levelDb === levelDb;
-      }))
-  );
+  /** @returns for each voice what lets it begin and end in its time, counted from the beginning of the schedule */
+  private prepared(entries: readonly TimedSound[]): readonly (() => void)[] {
+    return entries.flatMap(({ startSeconds, seconds, sounds }) =>
+      sounds.map((sound) => {
+        const line = this.prepare(sound);
+        const envelope = envelopeOf(sound.technique);
+        return () => {
+          line.begin(this.beganAt + startSeconds, envelope);
+          line.release(this.beganAt + startSeconds + seconds, envelope.release);
+        };
+      }),
+    );
+  }
 }
 
 /** Makes the one sound engine of the page; call it from a gesture of the reader, or the browser keeps silent. */

@@ -1,0 +1,24 @@
+import type { Listening } from '@/audio/listening';
+import { displayPitch } from '#shared/pitch/display';
+import { SECTION_FACTS } from '#shared/strings/sections';
+import type { VoiceSound } from '#shared/voicing/analysis';
+
+function voiceText(id: string, sounds: readonly VoiceSound[]): string {
+  const sound = sounds.find((other) => other.id === id);
+  if (!sound) return 'a note that is gone';
+  return `${SECTION_FACTS[sound.section].short} ${displayPitch(sound.pitch, 'english')}`;
+}
+
+/** @returns what of the chord is heard alone, in words; nothing while it is the whole */
+export function listeningText(listening: Listening, sounds: readonly VoiceSound[]): string | null {
+  switch (listening.kind) {
+    case 'chord':
+      return null;
+    case 'voice':
+      return `Only ${voiceText(listening.id, sounds)}`;
+    case 'pair':
+      return `Only ${voiceText(listening.lowerId, sounds)} with ${voiceText(listening.upperId, sounds)}`;
+    case 'register':
+      return `Only what sounds in the ${listening.register} register`;
+  }
+}

@@ -1,0 +1,39 @@
+import { computed, shallowRef, type ComputedRef, type ShallowRef } from 'vue';
+import { EVERYBODY, heardOf, heardSections, WHOLE_CHORD, type Listening, type Mix } from '@/audio/listening';
+import { loudestLevel } from '@/audio/levels';
+import type { ProgressionChord } from '@/audio/schedule';
+import { SECTIONS, type Section } from '#shared/strings/sections';
+import type { Decibels } from '#shared/units';
+import type { VoiceSound } from '#shared/voicing/analysis';
+
+/** What there is to hear. */
+export interface PlaybackMaterial {
+  readonly sounds: readonly VoiceSound[];
+  readonly progression: readonly ProgressionChord[];
+  readonly tempoBpm: number;
+}
+
+interface PlaybackChoice {
+  readonly material: ShallowRef<PlaybackMaterial>;
+  readonly listening: ShallowRef<Listening>;
+  readonly mix: ShallowRef<Mix>;
+  readonly heard: ComputedRef<readonly VoiceSound[]>;
+  /** A pair or a register is heard whoever is left out of the chord. */
+  readonly sections: ComputedRef<readonly Section[]>;
+  /** Of the whole progression, so that a soft chord stays soft and a part as strong as it is in its chord. */
+  loudest(): Decibels;
+}
+
+const NOTHING: PlaybackMaterial = { sounds: [], progression: [], tempoBpm: 60 };
+
+/** What of the chord is heard, and by whom. */
+export function usePlaybackChoice(): PlaybackChoice {
+  const material = shallowRef(NOTHING);
+  const listening = shallowRef<Listening>(WHOLE_CHORD);
+  const mix = shallowRef<Mix>(EVERYBODY);
+  const heard = computed(() => heardOf(material.value.sounds, listening.value));
+  const sections = computed(() => (listening.value.kind === 'chord' ? heardSections(mix.value) : SECTIONS));
+  const loudest = () =>
+    loudestLevel([material.value.sounds, ...material.value.progression.map(({ sounds }) => sounds)]);
+  return { material, listening, mix, heard, sections, loudest };
+}
