@@ -18,11 +18,16 @@ export interface PasswordWorkers {
   close(): Promise<void>;
 }
 
+/** From the sources a thread knows nothing of TypeScript until it is told. */
+function startFromSource(source: URL): Worker {
+  const start = `import('tsx/esm/api').then(({ tsImport }) => tsImport('${source.href}', '${import.meta.url}'))`;
+  return new Worker(start, { eval: true, execArgv: [] });
+}
+
 function startWorker(): Worker {
-  // Built, the worker lies beside the program; from the sources it needs the TypeScript loader.
   const worker = isBuilt
     ? new Worker(new URL('./password.worker.js', import.meta.url))
-    : new Worker(new URL('./password.worker.ts', import.meta.url), { execArgv: ['--import', 'tsx'] });
+    : startFromSource(new URL('./password.worker.ts', import.meta.url));
   worker.unref();
   return worker;
 }
@@ -31,7 +36,8 @@ function startWorker(): Worker {
 function runIn(worker: Worker, { job, resolve, reject }: Waiting): Promise<boolean> {
   return new Promise((done) => {
     const settle = (alive: boolean, tell: () => void) => {
-      worker.removeAllListeners();
+      // By name: with no name Node's own listeners, which ports rely on, would go too.
+      for (const event of ['message', 'error', 'exit']) worker.removeAllListeners(event);
       worker.unref();
       tell();
       done(alive);
