@@ -4,7 +4,7 @@ import { nextPath } from '@/router/next';
 import { routes } from '@/router/routes';
 import { useSessionStore } from '@/stores/session.store';
 
-const SITE = 'Siltline';
+export const SITE = 'Siltline';
 
 async function admit(to: RouteLocationNormalized) {
   const session = useSessionStore();

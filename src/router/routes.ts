@@ -15,6 +15,18 @@ export const routes: RouteRecordRaw[] = [
   { path: '/', name: 'lab', component: lab, meta: { title: 'Lab' } },
   { path: '/studies/:studyId', name: 'study', component: lab, meta: { title: 'Study', for: 'account' } },
   {
+    path: '/studies',
+    name: 'studies',
+    component: () => import('@/pages/StudiesPage.vue'),
+    meta: { title: 'Studies', for: 'account' },
+  },
+  {
+    path: '/mail',
+    name: 'mail',
+    component: () => import('@/pages/MailPage.vue'),
+    meta: { title: 'Mail', for: 'demo' },
+  },
+  {
     path: '/sign-in',
     name: 'sign-in',
     component: () => import('@/pages/SignInPage.vue'),

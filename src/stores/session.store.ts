@@ -1,15 +1,20 @@
 import { defineStore } from 'pinia';
 import { computed, ref } from 'vue';
 import type { Account, Role } from '#shared/contracts/accounts';
+import { ApiError } from '@/api/api-error';
 import * as api from '@/api/accounts';
+import type { LoadStatus } from '@/api/load-status';
+import { browserStorage } from '@/stores/draft-storage';
 
-export type LoadStatus = 'idle' | 'loading' | 'ready' | 'error';
+/** Set where somebody left while the server was away: their session ends as soon as it is back. */
+const OWED_KEY = 'siltline.sign-out-owed';
 
 /** Who is signed in. */
 export const useSessionStore = defineStore('session', () => {
   const account = ref<Account | null>(null);
   const demo = ref(false);
   const status = ref<LoadStatus>('idle');
+  const storage = browserStorage();
   let pending: Promise<void> | null = null;
 
   const role = computed<Role | 'visitor'>(() => account.value?.role ?? 'visitor');
@@ -17,6 +22,7 @@ export const useSessionStore = defineStore('session', () => {
   async function read(): Promise<void> {
     status.value = 'loading';
     try {
+      if (storage?.getItem(OWED_KEY)) await endSession();
       const session = await api.readSession();
       account.value = session.account;
       demo.value = session.demo;
@@ -38,9 +44,15 @@ export const useSessionStore = defineStore('session', () => {
 
   async function signIn(email: string, password: string): Promise<Account> {
     const answer = await api.signIn({ email, password });
+    storage?.removeItem(OWED_KEY);
     account.value = answer.account;
     status.value = 'ready';
     return answer.account;
+  }
+
+  async function endSession(): Promise<void> {
+    await api.signOut();
+    storage?.removeItem(OWED_KEY);
   }
 
   /** Forgets who was signed in, without asking the server. */
@@ -48,10 +60,21 @@ export const useSessionStore = defineStore('session', () => {
     account.value = null;
   }
 
+  /** Leaves, even where the server is away: then the session is ended when it is back. */
   async function signOut(): Promise<void> {
-    await api.signOut();
+    await endSession().catch((error: unknown) => {
+      if (!(error instanceof ApiError)) throw error;
+      storage?.setItem(OWED_KEY, 'yes');
+      status.value = 'idle';
+    });
     forget();
   }
 
-  return { account, demo, status, role, load, signIn, signOut, forget };
+  /** Asks anew who is signed in, after another tab has said that it changed. */
+  function reload(): Promise<void> {
+    status.value = 'idle';
+    return load();
+  }
+
+  return { account, demo, status, role, load, reload, signIn, signOut, forget };
 });

@@ -2,6 +2,9 @@ import { useRoute, useRouter } from 'vue-router';
 import { notice } from '@/composables/notices';
 import { nextPath } from '@/router/next';
 import { adoptDraft } from '@/stores/draft-adoption';
+import { browserStorage } from '@/stores/draft-storage';
+import { forgetWorkOfOthers } from '@/stores/kept-work';
+import { sessionChannel } from '@/stores/session-channel';
 import { useSessionStore } from '@/stores/session.store';
 
 /** Signs in and goes on: to the study that the draft became, to where one was sent from, or to the studies. */
@@ -12,6 +15,8 @@ export function useEntering() {
 
   async function enter(email: string, password: string): Promise<void> {
     const account = await session.signIn(email, password);
+    forgetWorkOfOthers(browserStorage(), account.id);
+    sessionChannel().tell('signed-in');
     const adopted = await adoptDraft(account);
     if (adopted.kind === 'adopted') {
       notice(`Your draft is saved as your study “${adopted.study.document.title}”.`);

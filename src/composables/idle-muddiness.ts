@@ -1,0 +1,58 @@
+import { onScopeDispose, shallowRef, triggerRef, watch, type ShallowRef } from 'vue';
+import type { Chord, StudyDocument } from '#shared/study/study.document';
+import { analyseChord, type ChordAnalysis } from '#shared/voicing/analysis';
+import { soundSettingsOf } from '#shared/voicing/settings';
+
+export type Muddiness = ChordAnalysis['muddiness'];
+
+interface Waiting {
+  readonly chord: Chord;
+  readonly study: StudyDocument;
+}
+
+/** Where the browser has no idle callback, a moment that lets it paint in between. */
+const BETWEEN_MS = 16;
+
+function whenIdle(work: () => void): () => void {
+  if (typeof requestIdleCallback === 'function') {
+    const handle = requestIdleCallback(work);
+    return () => cancelIdleCallback(handle);
+  }
+  const handle = setTimeout(work, BETWEEN_MS);
+  return () => clearTimeout(handle);
+}
+
+/**
+ * Works out the chords of many studies one by one while the browser is idle, so that a long table stands at
+ * once and its profiles follow.
+ * @returns what is known so far, by chord object: a document that comes anew is worked out anew
+ */
+export function useIdleMuddiness(
+  studies: () => readonly StudyDocument[],
+): Readonly<ShallowRef<ReadonlyMap<Chord, Muddiness>>> {
+  const known = shallowRef(new Map<Chord, Muddiness>());
+  let waiting: Waiting[] = [];
+  let cancel: (() => void) | null = null;
+
+  function next(): void {
+    cancel = null;
+    const job = waiting.shift();
+    if (!job) return;
+    known.value.set(job.chord, analyseChord(job.chord, soundSettingsOf(job.study)).muddiness);
+    triggerRef(known);
+    cancel = whenIdle(next);
+  }
+
+  watch(
+    studies,
+    (now) => {
+      waiting = now
+        .flatMap((study) => study.chords.map((chord) => ({ chord, study })))
+        .filter(({ chord }) => !known.value.has(chord));
+      cancel ??= whenIdle(next);
+    },
+    { immediate: true },
+  );
+  onScopeDispose(() => cancel?.());
+  return known;
+}

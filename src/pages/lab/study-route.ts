@@ -1,0 +1,32 @@
+import { useEventListener } from '@vueuse/core';
+import { watch, watchEffect } from 'vue';
+import { useRoute } from 'vue-router';
+import { SITE } from '@/router/router';
+import { useBenchStore } from '@/stores/bench.store';
+import { useStudyStore } from '@/stores/study.store';
+
+/** Opens what the address names, names the browser's tab after it, and warns before work is lost. */
+export function useStudyRoute(): void {
+  const route = useRoute();
+  const study = useStudyStore();
+  const bench = useBenchStore();
+
+  watch(
+    () => [route.name, route.params.studyId] as const,
+    ([name, studyId], before) => {
+      const draftLiesOpen = bench.holdsDraft && !study.study;
+      if (name === 'lab' && !draftLiesOpen) study.openDraft();
+      if (name !== 'study' || typeof studyId !== 'string') return;
+      // A draft that has just become this study lies open already.
+      const hasBecomeThis = before?.[0] !== undefined && study.study?.id === studyId;
+      if (!hasBecomeThis) void study.open(studyId);
+    },
+    { immediate: true },
+  );
+  watchEffect(() => {
+    if (study.study && route.name === 'study') document.title = `${bench.study.title} · ${SITE}`;
+  });
+  useEventListener(window, 'beforeunload', (event) => {
+    if (study.hasUnsaved && !study.keptInBrowser) event.preventDefault();
+  });
+}
