@@ -2,6 +2,7 @@ import type { Logger } from 'pino';
 import { createPasswords } from '#server/accounts/passwords';
 import { openDb, openPool, type Db } from '#server/db/connection';
 import { accounts } from '#server/db/schema/accounts';
+import { startPruning } from '#server/db/pruning';
 import { seedDemo } from '#server/demo/seed';
 import type { Deps } from '#server/deps';
 import type { Env, Settings } from '#server/env';
@@ -29,6 +30,7 @@ export async function composeDeps(settings: Settings, log: Logger, closing: Clos
   const transport = openTransport(smtpUrl);
   const mailer = startMailSender({ db, log, clock, transport, mailFrom: env.mailFrom });
   closing.add(mailer.stop);
+  closing.add(startPruning({ db, log, clock }));
   const deps: Deps = { env, db, pool, log, mailer, passwords, clock };
   if (env.mode === 'demo' && (await isEmpty(db))) await seedDemo(deps);
   return deps;

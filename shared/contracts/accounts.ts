@@ -9,9 +9,12 @@ export const SIGN_UP_ROLES = ['composer', 'teacher', 'student'] as const;
 export const MIN_PASSWORD = 8;
 export const MAX_PASSWORD = 256;
 
+/** Space around it is a slip of the hand and is taken off. */
 export const emailSchema = z
-  .email('this does not look like an e-mail address')
-  .max(254, 'an e-mail address has at most 254 characters');
+  .string()
+  .trim()
+  .max(254, 'an e-mail address has at most 254 characters')
+  .pipe(z.email('this does not look like an e-mail address'));
 export const passwordSchema = z
   .string()
   .min(MIN_PASSWORD, `a password has at least ${MIN_PASSWORD} characters`)
