@@ -1,0 +1,46 @@
+import { readFile } from 'node:fs/promises';
+import { pino } from 'pino';
+import type { DatabaseAccess } from '#server/db/access';
+import { openDb, openPool, type Db } from '#server/db/connection';
+import type { Settings } from '#server/env';
+import { lockFile } from '#server/setup/data-folder';
+import { openDatabase } from '#server/setup/database';
+import { credentialsSchema, DATABASE } from '#server/setup/mariadb/accounts';
+import { mariadbFiles } from '#server/setup/mariadb/files';
+import { findRunning } from '#server/setup/mariadb/leftover';
+import { migrateDatabase } from '#server/setup/migration';
+import { lockHolder } from './process-lock.mjs';
+
+/**
+ * Gives a command the database that the settings name, as the program has it: beside the running program, or, if the
+ * embedded database does not run, by starting it for as long as the work takes.
+ */
+export async function withDatabase<T>(settings: Settings, work: (db: Db) => Promise<T>): Promise<T> {
+  const running = settings.mode === 'external' ? undefined : await findAccess(settings.dataDir);
+  if (running) return withPool(running, work);
+  const database = await openDatabase(settings, pino({ level: 'silent' }));
+  try {
+    await migrateDatabase(database.migration);
+    return await withPool(database.app, work);
+  } finally {
+    await database.stop();
+  }
+}
+
+/** @returns how to reach the database that a running program has started. */
+async function findAccess(dataDir: string): Promise<DatabaseAccess | undefined> {
+  const files = mariadbFiles(dataDir);
+  const running = lockHolder(lockFile(dataDir)) && findRunning(files);
+  if (!running) return undefined;
+  const { app } = credentialsSchema.parse(JSON.parse(await readFile(files.credentials, 'utf8')));
+  return { ...app, database: DATABASE, socketPath: running.socket };
+}
+
+async function withPool<T>(access: DatabaseAccess, work: (db: Db) => Promise<T>): Promise<T> {
+  const pool = openPool(access);
+  try {
+    return await work(openDb(pool));
+  } finally {
+    await pool.end();
+  }
+}

@@ -1,0 +1,15 @@
+import { expect, test } from 'vitest';
+import { createClosing } from '#server/setup/closing';
+
+test('when things are closed, then in reverse order, each once, whatever fails', async () => {
+  const closed: string[] = [];
+  const failures: unknown[] = [];
+  const closing = createClosing();
+  closing.add(() => closed.push('database'));
+  closing.add(() => Promise.reject(new Error('pool')));
+  closing.add(async () => closed.push('server'));
+  await closing.run((error) => failures.push(error));
+  await closing.run((error) => failures.push(error));
+  expect(closed).toEqual(['server', 'database']);
+  expect(failures).toEqual([new Error('pool')]);
+});
