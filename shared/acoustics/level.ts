@@ -8,8 +8,8 @@ const DB_PER_POWER_DECADE = 10;
 /** @source J. Meyer 2009, from memory: at 3 kHz 1.1 dB for each dB at the bottom of the spectrum */
 const BRIGHTNESS_DB_PER_DB = 0.1;
 const BRIGHTNESS_TOP_HZ = 3000;
-/** Below this the spectrum only grows as a whole. */
-const BRIGHTNESS_BOTTOM_HZ = 300;
+/** Up to here lie a string's strongest partials, with which the spectrum grows as a whole; from memory. */
+const BRIGHTNESS_BOTTOM_HZ = 1000;
 
 /**
  * Level gained by several equal players.

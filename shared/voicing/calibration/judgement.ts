@@ -1,4 +1,5 @@
 import { COMMON_PRACTICE_ORDERINGS } from '#shared/data/common-practice-orderings';
+import type { LowIntervalLimit } from '#shared/data/low-interval-limits';
 import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
 import {
   CLEAR_TRIAD,
@@ -52,10 +53,12 @@ const SATURATED_MARGIN = 0.02;
 /**
  * Judges constants by the chart, the orderings, the ratings, real chords and made ones; the threshold is fitted
  * to the chart alone.
+ * @param untuned the constants but for the threshold
+ * @param chart the chart, or what is left of it where an interval is left out
  */
-export function judge(untuned: Untuned): Judgement {
+export function judge(untuned: Untuned, chart: readonly LowIntervalLimit[] = LOW_INTERVAL_LIMITS): Judgement {
   const model = muddinessModel({ ...untuned, threshold: 1 }, CALIBRATION_A4, AXIS_STEP);
-  const limits = fitThreshold(limitCurves(model, LOW_INTERVAL_LIMITS));
+  const limits = fitThreshold(limitCurves(model, chart));
   const density = (voices: readonly MuddinessVoice[]) => peakDensity(model, voices);
   const index = (voices: readonly MuddinessVoice[]) => indexOf(density(voices), limits.threshold);
   const rated = REGISTER_RATINGS.filter(({ register }) => register <= MUDDY_REGISTERS);

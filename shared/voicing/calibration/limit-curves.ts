@@ -12,9 +12,9 @@ export interface LimitCurve {
   readonly logDensity: readonly number[];
 }
 
-/** From G0, far under every limit of the chart, to F#4, far above. */
-const LOWEST: Midi = 19;
-const HIGHEST: Midi = 66;
+/** From C1, far under every limit of the chart, to D4, far above. */
+const LOWEST: Midi = 24;
+const HIGHEST: Midi = 62;
 
 /** @returns the curve of each interval of the chart for two like cello sections */
 export function limitCurves(

@@ -9,6 +9,8 @@ const MARGIN: Semitones = 24;
 /** A window counts as nothing where it has fallen under a millionth. */
 const WINDOW_END = 1e-6;
 const EXPONENT = 2;
+/** Masses are gathered on a finer axis than the values are taken on, so that where they lie hardly matters. */
+const FINER = 4;
 
 /** The pitch axis: points at even steps, the registers' edges among them. */
 export interface PitchAxis {
@@ -16,7 +18,7 @@ export interface PitchAxis {
   readonly count: number;
 }
 
-/** A window's values at 0, 1, 2 … steps from its centre; 1 at the centre. */
+/** A window's values at 0, 1, 2 … finer steps from its centre; 1 at the centre. */
 export type Window = Float64Array;
 
 /** Values along a stretch of the axis; nothing outside it. */
@@ -49,7 +51,8 @@ export function windowValue(distance: Semitones, width: Semitones): number {
 /** @returns the window on an axis, up to where it counts as nothing */
 export function windowOn({ step }: PitchAxis, width: Semitones): Window {
   const reach = Math.min(width * Math.sqrt(-Math.log(WINDOW_END) / EXPONENT), MARGIN);
-  return Float64Array.from({ length: Math.ceil(reach / step) + 1 }, (_, i) => windowValue(i * step, width));
+  const finer = step / FINER;
+  return Float64Array.from({ length: Math.ceil(reach / finer) + 1 }, (_, i) => windowValue(i * finer, width));
 }
 
 /** Gathers masses at pitches and smooths them; used again and again, so that adding allocates nothing. */
@@ -59,14 +62,15 @@ export interface Deposit {
   readonly smooth: (window: Window, scale: number) => Profile;
 }
 
-/** @returns a deposit on an axis; masses go linearly onto the two nearest points */
+/** @returns a deposit on an axis; masses go linearly onto the two nearest points of the finer one */
 export function depositOn(axis: PitchAxis): Deposit {
-  const margin = Math.round(MARGIN / axis.step);
-  const masses = new Float64Array(axis.count + 2 * margin);
+  const finer = axis.step / FINER;
+  const margin = Math.round(MARGIN / finer);
+  const masses = new Float64Array(axis.count * FINER + 2 * margin);
   let first = masses.length;
   let last = -1;
   const add = (pitch: Midi, mass: number): void => {
-    const place = (pitch - AXIS_LOW) / axis.step + margin;
+    const place = (pitch - AXIS_LOW) / finer + margin;
     const below = Math.floor(place);
     if (below < 0 || below + 1 >= masses.length) return;
     const part = place - below;
@@ -95,17 +99,18 @@ interface Stretch {
 function smoothed(masses: Float64Array, stretch: Stretch, axis: PitchAxis, window: Window): Profile {
   const { first, last, margin, scale } = stretch;
   const reach = window.length - 1;
-  const from = Math.max(first - margin - reach, 0);
-  const to = Math.min(last - margin + reach, axis.count - 1);
+  const from = Math.max(Math.ceil((first - margin - reach) / FINER), 0);
+  const to = Math.min(Math.floor((last - margin + reach) / FINER), axis.count - 1);
   if (to < from) return EMPTY_PROFILE;
   const values = new Float64Array(to - from + 1);
   for (let source = first; source <= last; source += 1) {
     const mass = (masses[source] ?? 0) * scale;
     if (mass === 0) continue;
     const centre = source - margin;
-    const high = Math.min(centre + reach, to);
-    for (let point = Math.max(centre - reach, from); point <= high; point += 1) {
-      const weight = window[point > centre ? point - centre : centre - point] ?? 0;
+    const high = Math.min(Math.floor((centre + reach) / FINER), to);
+    for (let point = Math.max(Math.ceil((centre - reach) / FINER), from); point <= high; point += 1) {
+      const distance = FINER * point - centre;
+      const weight = window[distance < 0 ? -distance : distance] ?? 0;
       values[point - from] = (values[point - from] ?? 0) + mass * weight;
     }
   }

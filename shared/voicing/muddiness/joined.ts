@@ -2,6 +2,7 @@ import { spectrumOf } from '#shared/acoustics/spectrum';
 import type { Decibels, Hertz } from '#shared/units';
 import type { Partial } from '#shared/voicing/analysis';
 import type { MuddinessVoice } from '#shared/voicing/muddiness/model';
+import type { Tone } from '#shared/voicing/muddiness/tones';
 import { toneOf } from '#shared/voicing/muddiness/tones';
 import type { VoiceSource } from '#shared/voicing/sound';
 
@@ -30,7 +31,7 @@ export function powerOf(level: Decibels): number {
 export function muddinessVoice(voice: Joinable, a4Hz: Hertz): MuddinessVoice {
   return {
     key: voice.toneKey,
-    makeTone: () => toneOf(spectrumOf(voice), a4Hz),
+    makeTone: () => toneOf(spectrumOf(voice), a4Hz, spectrumOf({ ...voice, dynamic: 'mf' })),
     energy: powerOf(voice.nominalDb),
   };
 }
@@ -70,7 +71,7 @@ function joined(group: readonly Member[], a4Hz: Hertz): JoinedVoice {
   const alike = new Set(group.map(({ voice }) => voice.toneKey)).size === 1;
   if (first && alike) return { ...muddinessVoice(first.voice, a4Hz), energy, members };
   const voices = group.map(({ voice }) => voice);
-  return { key: mixedKey(voices), makeTone: () => toneOf(jointPartials(voices), a4Hz), energy, members };
+  return { key: mixedKey(voices), makeTone: () => mixedTone(voices, a4Hz), energy, members };
 }
 
 /** Unlike shapes in unison make a shape of their own, told by how loud each is. */
@@ -82,17 +83,25 @@ function mixedKey(voices: readonly Joinable[]): string {
     .join(' + ');
 }
 
-/** Energies of shapes, each scaled to its voice's nominal power, added partial by partial. */
-function jointPartials(voices: readonly Joinable[]): readonly Partial[] {
+function mixedTone(voices: readonly Joinable[], a4Hz: Hertz): Tone {
+  const atMf = voices.map((voice) => spectrumOf({ ...voice, dynamic: 'mf' }));
+  return toneOf(jointPartials(voices, voices.map(spectrumOf), atMf), a4Hz, jointPartials(voices, atMf, atMf));
+}
+
+/** Energies of shapes, each scaled at mf to its voice's nominal power, added partial by partial. */
+function jointPartials(
+  voices: readonly Joinable[],
+  shapes: readonly (readonly Partial[])[],
+  atMf: readonly (readonly Partial[])[],
+): readonly Partial[] {
   const powers = new Map<number, { frequencyHz: Hertz; power: number }>();
-  for (const voice of voices) {
-    const partials = spectrumOf(voice);
-    const whole = partials.reduce((sum, { levelDb }) => sum + powerOf(levelDb), 0);
-    for (const { n, frequencyHz, levelDb } of partials) {
-      const power = (powerOf(voice.nominalDb) * powerOf(levelDb)) / whole;
+  voices.forEach(({ nominalDb }, i) => {
+    const whole = (atMf[i] ?? []).reduce((sum, { levelDb }) => sum + powerOf(levelDb), 0);
+    for (const { n, frequencyHz, levelDb } of shapes[i] ?? []) {
+      const power = (powerOf(nominalDb) * powerOf(levelDb)) / whole;
       powers.set(n, { frequencyHz, power: power + (powers.get(n)?.power ?? 0) });
     }
-  }
+  });
   return [...powers]
     .sort(([a], [b]) => a - b)
     .map(([n, { frequencyHz, power }]) => ({

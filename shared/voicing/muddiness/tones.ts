@@ -6,7 +6,10 @@ import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
 
 const DB_PER_AMPLITUDE_DECADE = 20;
 
-/** The shape of a voice's sound: its partials scaled so that the squares of their amplitudes add up to 1. */
+/**
+ * The shape of a voice's sound: its partials scaled so that the squares of their amplitudes add up to 1 at mf.
+ * Playing louder adds to the top and takes nothing from the bottom.
+ */
 export interface Tone {
   /** Its partials, without the level of the voice that sounds it. */
   readonly partials: readonly Partial[];
@@ -20,11 +23,12 @@ export interface Tone {
 /**
  * @param partials rising in frequency, at least one; their common level drops out
  * @param a4Hz places the tone on the pitch axis
+ * @param atMf the same tone at mf, by which it is scaled
  */
-export function toneOf(partials: readonly Partial[], a4Hz: Hertz): Tone {
+export function toneOf(partials: readonly Partial[], a4Hz: Hertz, atMf: readonly Partial[] = partials): Tone {
   const frequencies = Float64Array.from(partials, ({ frequencyHz }) => frequencyHz);
-  const amplitudes = Float64Array.from(partials, ({ levelDb }) => 10 ** (levelDb / DB_PER_AMPLITUDE_DECADE));
-  const scale = 1 / Math.sqrt(amplitudes.reduce((sum, a) => sum + a * a, 0));
+  const amplitudes = Float64Array.from(partials, amplitudeOf);
+  const scale = 1 / Math.sqrt(atMf.reduce((sum, partial) => sum + amplitudeOf(partial) ** 2, 0));
   return {
     partials,
     fundamental: midiOfFrequency(frequencies[0] ?? 0, a4Hz),
@@ -32,6 +36,10 @@ export function toneOf(partials: readonly Partial[], a4Hz: Hertz): Tone {
     amplitudes: amplitudes.map((a) => a * scale),
     pitches: frequencies.map((frequency) => midiOfFrequency(frequency, a4Hz)),
   };
+}
+
+function amplitudeOf({ levelDb }: Partial): number {
+  return 10 ** (levelDb / DB_PER_AMPLITUDE_DECADE);
 }
 
 /**

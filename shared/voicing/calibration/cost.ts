@@ -1,0 +1,72 @@
+import type { Judgement } from '#shared/voicing/calibration/judgement';
+import { mean } from '#shared/voicing/calibration/statistics';
+import { limitCost } from '#shared/voicing/calibration/threshold';
+
+/**
+ * What a judgement costs, in squared semitones of the chart: the limits' distances, and beside them whatever
+ * another yardstick is missed by. Each bound is drawn a little inside what must hold, so that a fit that costs
+ * little holds with something to spare.
+ */
+export interface CostParts {
+  readonly limits: number;
+  readonly orderings: number;
+  readonly ratings: number;
+  readonly chords: number;
+}
+
+/** Orderings must hold by 1. */
+const ORDERING_MARGIN = 1.5;
+const ORDERING_WEIGHT = 0.5;
+/** Ratings must correlate at −0.85 or better. */
+const CORRELATION = -0.88;
+const CORRELATION_UNIT = 0.02;
+const CORRELATION_WEIGHT = 0.2;
+/** Chords that pass no limit must score 50 or less. */
+const SCORE_CHORD_TOP = 47;
+/** Open chords must score 55 or less, their mean under 45. */
+const OPEN_CHORD_TOP = 52;
+const OPEN_CHORD_MEAN = 42;
+/** Close low chords must score over 75, chords that pass a limit 55 or more. */
+const CLOSE_CHORD_BOTTOM = 80;
+const PASSING_CHORD_BOTTOM = 60;
+/** The triads must lie over 0 and under 25, and between 25 and 60. */
+const CLEAR_TRIAD_TOP = 20;
+const CLEAR_TRIAD_BOTTOM = 0.5;
+const MIDDLE_TRIAD_BOTTOM = 28;
+const MIDDLE_TRIAD_TOP = 55;
+/** Points of the index that cost one. */
+const INDEX_UNIT = 5;
+const CHORD_WEIGHT = 0.5;
+
+/** @returns the parts of the cost; their sum is what the fit makes small */
+export function costParts(judgement: Judgement): CostParts {
+  const { openChords } = judgement;
+  const chords = [
+    ...judgement.scoreChords.map((index) => index - SCORE_CHORD_TOP),
+    ...openChords.map((index) => index - OPEN_CHORD_TOP),
+    mean(openChords) - OPEN_CHORD_MEAN,
+    ...judgement.closeChords.map((index) => CLOSE_CHORD_BOTTOM - index),
+    ...judgement.passingChords.map((index) => PASSING_CHORD_BOTTOM - index),
+    judgement.clearTriad - CLEAR_TRIAD_TOP,
+    CLEAR_TRIAD_BOTTOM - judgement.clearTriad,
+    MIDDLE_TRIAD_BOTTOM - judgement.middleTriad,
+    judgement.middleTriad - MIDDLE_TRIAD_TOP,
+  ];
+  return {
+    limits: limitCost(judgement.limits),
+    orderings: ORDERING_WEIGHT * excess(judgement.orderings.map((margin) => ORDERING_MARGIN - margin)),
+    ratings: CORRELATION_WEIGHT * excess([(judgement.correlation - CORRELATION) / CORRELATION_UNIT]),
+    chords: CHORD_WEIGHT * excess(chords.map((points) => points / INDEX_UNIT)),
+  };
+}
+
+/** @returns the whole cost */
+export function costOf(judgement: Judgement): number {
+  const { limits, orderings, ratings, chords } = costParts(judgement);
+  return limits + orderings + ratings + chords;
+}
+
+/** Σ x² over what exceeds 0. */
+function excess(values: readonly number[]): number {
+  return values.reduce((sum, value) => sum + Math.max(value, 0) ** 2, 0);
+}
