@@ -18,8 +18,8 @@ export interface Finding {
 
 /** What can be said of the whole chord. */
 export interface Headline {
-  /** 0 … 100, whole. */
-  readonly index: number;
+  /** 0 … 100, whole; null without notes. */
+  readonly index: number | null;
   /** Where it is reached and what stands under its limit. */
   readonly text: string;
 }
@@ -114,7 +114,8 @@ export function findingsOf(analysis: ChordAnalysis, naming: NoteNaming): readonl
  * The chord's figure and where it comes from.
  * @example headlineOf(analysis).text // 'cloudiest in the great octave; 2 pairs under their low limits'
  */
-export function headlineOf({ muddiness, limits }: ChordAnalysis): Headline {
+export function headlineOf({ voices, muddiness, limits }: ChordAnalysis): Headline {
+  if (voices.length === 0) return { index: null, text: 'no notes yet' };
   const index = Math.round(muddiness.index);
   const pairs =
     limits.length === 1 ? '1 pair under its low limit' : `${limits.length} pairs under their low limits`;

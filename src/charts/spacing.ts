@@ -23,20 +23,28 @@ export interface SpacingBracket {
   readonly spoken: string;
 }
 
-/** Two lines of 12-pixel type. */
+/** How the brackets are worded. */
+export interface SpacingWords {
+  readonly naming: NoteNaming;
+  /** Where there is little room. */
+  readonly brief: boolean;
+}
+
+/** From one line of 12-pixel type to the next. */
 const LABEL_GAP = 15;
 const MOST_COLUMNS = 4;
 
 type Placed = Omit<SpacingBracket, 'labelY'>;
 type Pair = readonly [VoiceSound, VoiceSound];
 
-function words(lower: VoiceSound, upper: VoiceSound, under: number, naming: NoteNaming) {
+/** @param brief says only how far a pair stands under its limit, not its name too */
+function words(lower: VoiceSound, upper: VoiceSound, under: number, { naming, brief }: SpacingWords) {
   const [a, b] = [parsePitch(lower.pitch), parsePitch(upper.pitch)];
   const [name, short] = a && b ? [intervalName(a, b), shortIntervalName(a, b)] : ['', ''];
-  const suffix = under > 0 ? `, ${Math.round(under)} under` : '';
+  const below = under > 0 ? `${Math.round(under)} under` : '';
   const notes = `${displayPitch(lower.pitch, naming)} to ${displayPitch(upper.pitch, naming)}`;
   return {
-    label: `${short}${suffix}`,
+    label: [brief && below ? '' : short, below].filter((part) => part !== '').join(', '),
     spoken: `${notes}: ${name}${under > 0 ? `, ${Math.round(under)} semitones under its low limit` : ''}`,
   };
 }
@@ -71,7 +79,7 @@ function columnFor(placed: readonly Placed[], top: number, bottom: number): numb
 export function spacingOf(
   analysis: ChordAnalysis,
   axis: PitchAxis,
-  naming: NoteNaming,
+  wording: SpacingWords,
 ): readonly SpacingBracket[] {
   const under = new Map(analysis.limits.map((limit) => [`${limit.lowerId} ${limit.upperId}`, limit]));
   const neighbours = Math.max(analysis.voices.length - 1, 0);
@@ -82,7 +90,7 @@ export function spacingOf(
     const column =
       index < neighbours && isNeighbour(analysis, lower, upper) ? 0 : columnFor(placed, top, bottom);
     const ids = { lowerId: lower.id, upperId: upper.id };
-    placed.push({ ...ids, top, bottom, column, under: below, ...words(lower, upper, below, naming) });
+    placed.push({ ...ids, top, bottom, column, under: below, ...words(lower, upper, below, wording) });
   });
   return withLabels(placed, axis);
 }

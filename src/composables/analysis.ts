@@ -14,12 +14,17 @@ function settingsKey({ a4Hz, intonation, ensemble, key }: SoundSettings): string
   return JSON.stringify([a4Hz, intonation, ensemble, key.tonic]);
 }
 
+/** @returns how a chord was judged, or `null` where it has not been judged under these settings */
+export function knownAnalysis(chord: Chord, settings: SoundSettings): ChordAnalysis | null {
+  const kept = known.get(chord);
+  return kept?.settings === settingsKey(settings) ? kept.analysis : null;
+}
+
 /** Judges a chord, or remembers how it was judged. */
 export function analysisOf(chord: Chord, settings: SoundSettings): ChordAnalysis {
-  const key = settingsKey(settings);
-  const kept = known.get(chord);
-  if (kept?.settings === key) return kept.analysis;
+  const before = knownAnalysis(chord, settings);
+  if (before) return before;
   const analysis = analyseChord(chord, settings);
-  known.set(chord, { settings: key, analysis });
+  known.set(chord, { settings: settingsKey(settings), analysis });
   return analysis;
 }

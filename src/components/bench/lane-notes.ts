@@ -34,6 +34,8 @@ interface Shown {
 
 /** Height of a token and a little air, in pixels. */
 const TOKEN_HEIGHT = 24;
+/** Of a lane, from its edge to the middle of the outermost tokens. */
+const EDGE = 0.14;
 const LANE_PERCENT = 100 / SECTIONS.length;
 
 function fundamental(sound: VoiceSound | undefined): string {
@@ -41,8 +43,10 @@ function fundamental(sound: VoiceSound | undefined): string {
   return first ? hertzText(first.frequencyHz) : '';
 }
 
+/** One column stands in the middle of its lane; several reach from edge to edge, and a little over. */
 function leftOf(section: Section, { column, columns }: TokenColumn): number {
-  return LANE_PERCENT * (SECTIONS.indexOf(section) + (column + 1) / (columns + 1));
+  const across = columns === 1 ? 1 / 2 : EDGE + ((1 - 2 * EDGE) * column) / (columns - 1);
+  return LANE_PERCENT * (SECTIONS.indexOf(section) + across);
 }
 
 function spokenOf(voice: Voice, hertz: string, beyond: boolean, naming: NoteNaming): string {
