@@ -1,9 +1,9 @@
 import { useEventListener } from '@vueuse/core';
 import type { Playback } from '@/composables/playback';
 
-/** What answers the space bar itself: fields, buttons, links, and whatever says that it is one of them. */
+/** What answers the space bar itself: fields, buttons, links, and whatever says that it is one; a note does not. */
 const ANSWERS_SPACE =
-  'input, textarea, select, button, a[href], summary, [contenteditable], [role="button"], [role="slider"], [role="checkbox"], [role="menuitem"], [role="option"], [role="switch"], [role="tab"], [role="dialog"]';
+  'input, textarea, select, button, a[href], summary, [contenteditable], [role="button"], [role="checkbox"], [role="menuitem"], [role="option"], [role="switch"], [role="tab"], [role="dialog"]';
 
 /** @returns whether the space bar belongs to the element that has the focus */
 export function answersSpace(target: EventTarget | null): boolean {

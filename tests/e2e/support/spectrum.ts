@@ -109,3 +109,24 @@ export function peakOf({ left, right }: Pick<Recording, 'left' | 'right'>): numb
   const largest = (samples: Float32Array) => samples.reduce((most, x) => Math.max(most, Math.abs(x)), 0);
   return Math.max(largest(left), largest(right));
 }
+
+/** Weights of the eighth difference: a high-pass under which a crack stands out from a tone. */
+const EIGHTH_DIFFERENCE = [1, -8, 28, -56, 70, -56, 28, -8, 1] as const;
+/** The eighth difference of a step of 1: the largest sum of the weights up to one place. */
+const OF_A_STEP = 35;
+
+/**
+ * The largest break of a recording: the height of the step that would stand out as far as its roughest moment
+ * does. Tones without a break leave a little too, the more the higher they are.
+ */
+export function largestBreak({ left, right }: Pick<Recording, 'left' | 'right'>): number {
+  const roughness = (samples: Float32Array, index: number) =>
+    Math.abs(EIGHTH_DIFFERENCE.reduce((sum, weight, back) => sum + weight * (samples[index - back] ?? 0), 0));
+  const roughest = (samples: Float32Array) =>
+    samples.reduce(
+      (most, _, index) =>
+        index < EIGHTH_DIFFERENCE.length ? most : Math.max(most, roughness(samples, index)),
+      0,
+    );
+  return Math.max(roughest(left), roughest(right)) / OF_A_STEP;
+}
