@@ -15,6 +15,9 @@ import { migrateDatabase } from '#server/setup/migration';
 
 const clock = () => new Date();
 
+/** A mail that is cut off is sent again after the next start. */
+const MAIL_PATIENCE_MS = 2000;
+
 /** Puts together what the program works with, in the order in which one needs the other. */
 export async function composeDeps(settings: Settings, log: Logger, closing: Closing): Promise<Deps> {
   const database = await openDatabase(settings, log);
@@ -29,7 +32,7 @@ export async function composeDeps(settings: Settings, log: Logger, closing: Clos
   closing.add(passwords.close);
   const transport = openTransport(smtpUrl);
   const mailer = startMailSender({ db, log, clock, transport, mailFrom: env.mailFrom });
-  closing.add(mailer.stop);
+  closing.add(mailer.stop, MAIL_PATIENCE_MS);
   closing.add(startPruning({ db, log, clock }));
   const deps: Deps = { env, db, pool, log, mailer, passwords, clock };
   if (env.mode === 'demo' && (await isEmpty(db))) await seedDemo(deps);

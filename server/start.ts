@@ -8,8 +8,8 @@ import { checkAddress, closeServer, listen } from '#server/setup/listen';
 import { createLogger } from '#server/setup/logger';
 import { untilAskedToStop } from '#server/setup/signals';
 
-/** Requests under way are given so long to finish. */
-const PATIENCE_MS = 10_000;
+/** Requests under way are given so long to finish; the whole stop then stays within about ten seconds. */
+const PATIENCE_MS = 7000;
 
 function greeting({ mode, host, port, publicUrl, withoutEffect }: Settings): string {
   const lines = [`Siltline is ready: ${publicUrl}`];
