@@ -1,4 +1,4 @@
-import { onScopeDispose, shallowRef, triggerRef, watch, type ShallowRef } from 'vue';
+import { onScopeDispose, shallowRef, watch, type ShallowRef } from 'vue';
 import type { Chord, StudyDocument } from '#shared/study/study.document';
 import { analyseChord, type ChordAnalysis } from '#shared/voicing/analysis';
 import { soundSettingsOf } from '#shared/voicing/settings';
@@ -30,7 +30,7 @@ function whenIdle(work: () => void): () => void {
 export function useIdleMuddiness(
   studies: () => readonly StudyDocument[],
 ): Readonly<ShallowRef<ReadonlyMap<Chord, Muddiness>>> {
-  const known = shallowRef(new Map<Chord, Muddiness>());
+  const known = shallowRef<ReadonlyMap<Chord, Muddiness>>(new Map());
   let waiting: Waiting[] = [];
   let cancel: (() => void) | null = null;
 
@@ -38,8 +38,8 @@ export function useIdleMuddiness(
     cancel = null;
     const job = waiting.shift();
     if (!job) return;
-    known.value.set(job.chord, analyseChord(job.chord, soundSettingsOf(job.study)).muddiness);
-    triggerRef(known);
+    const { muddiness } = analyseChord(job.chord, soundSettingsOf(job.study));
+    known.value = new Map(known.value).set(job.chord, muddiness);
     cancel = whenIdle(next);
   }
 

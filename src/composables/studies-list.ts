@@ -19,6 +19,8 @@ export function useStudiesList() {
     queryKey: QUERY_KEY,
     queryFn: ({ pageParam }) => listStudies({ after: pageParam, limit: PAGE }),
     initialPageParam: undefined as string | undefined,
+    // Documents are only read: watching them deeply would cost more than drawing them.
+    shallow: true,
     getNextPageParam: (last: Page) => last.next ?? undefined,
   });
   const rows = computed<readonly StudyRow[]>(
