@@ -8,7 +8,7 @@ import { stoppedFinding, stringReaches, voiceFinding } from '#shared/strings/rea
 import type { Section } from '#shared/strings/sections';
 import { SECTIONS } from '#shared/strings/sections';
 import { DEFAULT_ENSEMBLE, techniqueSchema } from '#shared/study/study.document';
-import { chordOf } from '../../../support/chords';
+import { chordOf } from '../../../support/voicings';
 
 const part = (section: Section, pitch: string, string: number | null = null) => ({
   section,

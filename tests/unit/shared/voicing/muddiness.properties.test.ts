@@ -7,12 +7,12 @@ import { analyseChord } from '#shared/voicing/analysis';
 import { twoCelloSections, voicingOf } from '#shared/voicing/calibration/yardsticks';
 import { MUDDINESS_CONSTANTS } from '#shared/data/muddiness-constants';
 import { joinUnisons } from '#shared/voicing/muddiness/joined';
-import { densityOf, muddinessModel } from '#shared/voicing/muddiness/model';
+import { densityOf, muddinessModel, peakDensity } from '#shared/voicing/muddiness/model';
 import { modelFor } from '#shared/voicing/muddiness/models';
-import { cloudiestOf, indexOf, peakDensity, registerPeaks } from '#shared/voicing/muddiness/scores';
+import { cloudiestOf, indexOf, registerPeaks } from '#shared/voicing/muddiness/scores';
 import { sourcesOf } from '#shared/voicing/sound';
 import { REGISTER_BOUNDS } from '#shared/voicing/registers';
-import { chordOf, EVEN_SETTINGS, keyName, voicing } from '../../../support/chords';
+import { chordOf, EVEN_SETTINGS, keyName, voicing } from '../../../support/voicings';
 
 const model = modelFor(440);
 const pitches = fc.integer({ min: 24, max: 96 }).map(keyName);
