@@ -80,8 +80,14 @@ function placeOf({ letter, octave }: Pitch): number {
   return LETTER_ORDER.indexOf(letter) + STEPS * octave;
 }
 
+/** Of two that sound alike the one on the lower letter is the lower. */
+function risingPair(a: Pitch, b: Pitch): readonly [Pitch, Pitch] {
+  const rise = midiOf(b) - midiOf(a) || placeOf(b) - placeOf(a);
+  return rise >= 0 ? [a, b] : [b, a];
+}
+
 function measure(a: Pitch, b: Pitch): Measured | null {
-  const [lower, upper] = midiOf(a) <= midiOf(b) ? [a, b] : [b, a];
+  const [lower, upper] = risingPair(a, b);
   const all = placeOf(upper) - placeOf(lower);
   if (all < 0) return null;
   const degree = all % STEPS;

@@ -5,8 +5,8 @@ import { changeText, factsOf } from '#shared/voicing/voice.sentences';
 import { hertzText, registerName, semitonesText } from '#shared/voicing/words';
 import { reachOf } from '#shared/voicing/reach.sentences';
 import type { PairShare } from '#shared/voicing/analysis';
-import { analysisOf } from '../../../support/analyses';
-import { chordOf } from '../../../support/chords';
+import { analysisOf } from '../../../support/made-up-analyses';
+import { chordOf } from '../../../support/typed-chords';
 
 const chord = chordOf('DB D2, Vc F2 A2');
 const limit = (lowerId: string, upperId: string, semitonesBelow: number) => ({
