@@ -4,13 +4,6 @@ import { findAccount } from '#server/accounts/accounts.repository';
 import type { Db } from '#server/db/connection';
 import { IDLE_MS, SessionStore } from '#server/sessions/session.store';
 
-declare module 'express-session' {
-  interface SessionData {
-    /** Absent for a visitor. */
-    accountId?: string | undefined;
-  }
-}
-
 interface Where {
   readonly publicUrl: string;
   readonly port: number;

@@ -5,6 +5,13 @@ import { z } from 'zod';
 import type { Connection, Db } from '#server/db/connection';
 import { sessions } from '#server/db/schema/sessions';
 
+declare module 'express-session' {
+  interface SessionData {
+    /** Absent for a visitor. */
+    accountId?: string | undefined;
+  }
+}
+
 export const IDLE_MS = 7 * 24 * 60 * 60 * 1000;
 /** However much it is used, a session ends then. */
 export const ABSOLUTE_MS = 30 * 24 * 60 * 60 * 1000;

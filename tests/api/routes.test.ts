@@ -1,0 +1,174 @@
+import { expect, test } from 'vitest';
+import * as accountEndpoints from '#shared/contracts/accounts';
+import * as annotationEndpoints from '#shared/contracts/annotations';
+import * as demoEndpoints from '#shared/contracts/demo';
+import * as studyEndpoints from '#shared/contracts/studies';
+import { createTestApp, type TestApp } from '../support/app';
+import { enter, somebody, type Somebody } from '../support/people';
+import { documentOf, makeStudy, saveOf, shareWith } from '../support/studies';
+
+const KEY = '0b4b6c5e-7a53-4a39-9f25-3f0c6e6f3a11';
+const STUDY = '/api/studies/:studyId';
+const SECRET = 'AAAAAAAAAAAAAAAAAAAAAA';
+
+type Row = readonly [method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE', path: string, body?: object];
+
+/** Open to visitors: what they do is checked in tests of their own. */
+const OPEN: readonly Row[] = [
+  ['GET', '/api/session'],
+  ['GET', '/api/session/csrf-token'],
+  ['POST', '/api/session', { email: 'a@x.example', password: 'not the pass phrase' }],
+  ['DELETE', '/api/session'],
+  [
+    'POST',
+    '/api/accounts',
+    { email: 'a@x.example', name: 'A', password: 'six geese a-laying', role: 'composer' },
+  ],
+  ['POST', '/api/confirmation-requests', { email: 'a@x.example' }],
+  ['POST', '/api/confirmations', { token: SECRET }],
+  ['POST', '/api/password-reset-requests', { email: 'a@x.example' }],
+  ['POST', '/api/password-resets', { token: SECRET, password: 'six geese a-laying' }],
+  ['GET', '/api/demo/people'],
+  ['GET', '/api/demo/mails'],
+];
+
+const CREATE: Row = ['POST', '/api/studies', { document: documentOf('New'), requestKey: KEY }];
+const REMARK = { anchor: { kind: 'study' }, text: 'Listen to the basses', requestKey: KEY };
+
+/** What each person is answered, in the order of PEOPLE. */
+const GUARDED: readonly (readonly [Row, readonly number[]])[] = [
+  //                                                                            owner cmnt view strg admin visitor
+  [
+    ['GET', '/api/studies'],
+    [200, 200, 200, 200, 403, 401],
+  ],
+  [CREATE, [200, 200, 200, 200, 403, 401]],
+  [
+    ['GET', STUDY],
+    [200, 200, 200, 404, 403, 401],
+  ],
+  [
+    ['PUT', STUDY, saveOf(documentOf('Changed'), 1, KEY)],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['PATCH', STUDY, { title: 'Renamed', basedOn: 1, requestKey: KEY }],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['DELETE', STUDY],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['POST', `${STUDY}/restorations`],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['GET', `${STUDY}/shares`],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['POST', `${STUDY}/shares`, { email: 'new@x.example', may: 'view' }],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['DELETE', `${STUDY}/shares/:shareId`],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['GET', `${STUDY}/annotations`],
+    [200, 200, 200, 404, 403, 401],
+  ],
+  [
+    ['POST', `${STUDY}/annotations`, REMARK],
+    [200, 200, 403, 404, 403, 401],
+  ],
+  // The annotation is a third person's: its author and the owner alone may take it away.
+  [
+    ['DELETE', `${STUDY}/annotations/:annotationId`],
+    [200, 403, 403, 404, 403, 401],
+  ],
+];
+const PEOPLE = ['owner', 'comment', 'view', 'stranger', 'administrator', 'visitor'] as const;
+
+interface Scene {
+  readonly at: TestApp;
+  readonly who: Readonly<Record<(typeof PEOPLE)[number], Somebody>>;
+  readonly fill: (path: string) => string;
+}
+
+/** One study with an owner, people who may comment and view, an annotation of somebody else's, and strangers. */
+async function setScene(): Promise<Scene> {
+  const at = await createTestApp();
+  const owner = await enter(at, { role: 'teacher' });
+  const comment = await enter(at, { role: 'composer' });
+  const view = await enter(at, { role: 'student' });
+  const third = await enter(at, { role: 'student' });
+  const { id } = await makeStudy(owner);
+  await shareWith(owner, id, comment.email, 'comment');
+  await shareWith(owner, id, view.email, 'view');
+  const share = await shareWith(owner, id, third.email, 'comment');
+  const annotation = await third.send('POST', `/api/studies/${id}/annotations`, REMARK);
+  const fill = (path: string) =>
+    path
+      .replace(':studyId', id)
+      .replace(':shareId', share.id)
+      .replace(':annotationId', String(annotation.body.id));
+  const stranger = await enter(at, { role: 'teacher' });
+  const administrator = await enter(at, { role: 'administrator' });
+  return { at, who: { owner, comment, view, stranger, administrator, visitor: somebody(at) }, fill };
+}
+
+function nameOf([method, path]: Row): string {
+  return `${method} ${path}`;
+}
+
+test('when a contract has a route, then it is in the lists above, and nothing else is', () => {
+  const modules = [accountEndpoints, annotationEndpoints, demoEndpoints, studyEndpoints];
+  const contracts = modules
+    .flatMap((module) => Object.values(module))
+    .filter(
+      (value): value is { method: string; path: string } => typeof value === 'object' && 'method' in value,
+    )
+    .map(({ method, path }) => `${method} ${path}`);
+  const listed = [...OPEN, ...GUARDED.map(([row]) => row)].map(nameOf);
+  expect(listed.sort()).toEqual(contracts.sort());
+});
+
+test.each(GUARDED.map(([row, expected]) => [nameOf(row), row, expected] as const))(
+  'when %s is called by each kind of person, then each is answered as written here',
+  async (_name, [method, path, body], expected) => {
+    const answers: Record<string, number> = {};
+    const { who, fill } = await setScene();
+    // The owner comes last: what they do may take the study away from the others.
+    for (const person of [...PEOPLE].reverse()) {
+      answers[person] = (await who[person].send(method, fill(path), body)).status;
+    }
+    expect(PEOPLE.map((person) => answers[person])).toEqual(expected);
+  },
+  60_000,
+);
+
+const CHANGING = [...OPEN, ...GUARDED.map(([row]) => row)].filter(([method]) => method !== 'GET');
+
+test.each(CHANGING.map((row) => [nameOf(row), row] as const))(
+  'when %s carries no CSRF token, or one of another session, then it is refused',
+  async (_name, [method, path, body]) => {
+    const { at, who, fill } = await setScene();
+    const other = (await somebody(at).send('GET', '/api/session/csrf-token')).body.csrfToken;
+    const tries: Record<string, string>[] = [{}, { 'x-csrf-token': '' }, { 'x-csrf-token': String(other) }];
+    for (const headers of tries) {
+      const answer = await who.owner.sendRaw(method, fill(path), headers, body);
+      expect(answer.status).toBe(403);
+      expect(answer.body.error.code).toBe('csrf.invalid');
+    }
+  },
+  60_000,
+);
+
+test('when an id is well made but names nothing, then the answer is the same as for a stranger', async () => {
+  const { who, fill } = await setScene();
+  const foreign = await who.stranger.send('GET', fill(STUDY));
+  const unknown = await who.stranger.send('GET', `/api/studies/${SECRET}`);
+  expect([unknown.status, unknown.body]).toEqual([foreign.status, foreign.body]);
+});
