@@ -1,4 +1,5 @@
 import { eq } from 'drizzle-orm';
+import 'csrf-sync';
 import type { SessionData } from 'express-session';
 import { expect, test } from 'vitest';
 import { accounts } from '#server/db/schema/accounts';
