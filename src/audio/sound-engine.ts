@@ -17,6 +17,8 @@ export interface SoundEngine {
   hold(sounds: readonly VoiceSound[], loudest: Decibels): Promise<void>;
   /** Plays a schedule from its beginning. */
   play(schedule: readonly TimedSound[], loudest: Decibels): Promise<void>;
+  /** Lets what has not begun yet be played as it is now; nothing where no schedule is being played. */
+  revise(schedule: readonly TimedSound[], loudest: Decibels): void;
   /** Ends everything as players do, within a fifth of a second; nothing that was to come begins. */
   stop(): void;
   /** Ends everything at once. */

@@ -70,6 +70,12 @@ class ToneEngine implements SoundEngine {
     this.pump();
   }
 
+  revise(schedule: readonly TimedSound[], loudest: Decibels): void {
+    if (this.state !== 'playing') return;
+    this.schedule = schedule;
+    this.rescale(loudest, getContext().now());
+  }
+
   stop(): void {
     this.order += 1;
     this.end(null);

@@ -3,6 +3,7 @@ import { readonly, ref, shallowReadonly, watch, type Ref } from 'vue';
 import { sameListening, toggled, WHOLE_CHORD, type Listening, type Mix } from '@/audio/listening';
 import { loadSoundEngine } from '@/audio/load-engine';
 import { buildSchedule, progressionSchedule, strikeSchedule, type TimedSound } from '@/audio/schedule';
+import type { SoundEngine } from '@/audio/sound-engine';
 import { boundedVolume, QUIET_START } from '@/audio/volume';
 import { usePlaybackChoice, type PlaybackMaterial } from '@/composables/playback-choice';
 import { useLazyEngine, type LoadEngine, type PlaybackStatus } from '@/composables/playback-engine';
@@ -35,12 +36,21 @@ export interface Playback {
   silence(): void;
 }
 
+/** A browser may put the sound of a hidden tab to sleep: what was sounding goes on when the tab comes back. */
+function useWaking(sounding: () => SoundEngine | null): void {
+  useEventListener(document, 'visibilitychange', () => {
+    if (document.visibilityState === 'visible') void sounding()?.wake();
+  });
+}
+
 /** Makes playback over an engine that is fetched when it is first needed. */
 export function createPlayback(load: LoadEngine): Playback {
   const volume = ref<Decibels>(QUIET_START);
   const { material, listening, mix, heard, sections, loudest } = usePlaybackChoice();
   const { engine, status, order, withdraw } = useLazyEngine(load, volume);
   const { mode, level, playingChordId, show } = usePlaybackSigns(engine);
+
+  let tempoBpm = material.value.tempoBpm;
 
   async function hold(part: Listening): Promise<void> {
     listening.value = part;
@@ -50,6 +60,12 @@ export function createPlayback(load: LoadEngine): Playback {
   async function play(begun: PlaybackMode, schedule: readonly TimedSound[]): Promise<void> {
     listening.value = WHOLE_CHORD;
     if (await order((to) => to.play(schedule, loudest()))) show(begun);
+  }
+
+  /** A tempo is kept to the end, so that changing it makes nobody lose the beat. */
+  async function playProgression(): Promise<void> {
+    tempoBpm = material.value.tempoBpm;
+    await play('progression', progressionSchedule(material.value.progression, tempoBpm));
   }
 
   function end(how: 'stop' | 'silence'): void {
@@ -72,10 +88,12 @@ export function createPlayback(load: LoadEngine): Playback {
   watch(heard, () => {
     if (mode.value === 'hold') void hold(listening.value);
   });
-  watch([sections, engine], () => engine.value?.setSections(sections.value));
-  useEventListener(document, 'visibilitychange', () => {
-    if (document.visibilityState === 'visible' && mode.value !== 'silent') void engine.value?.wake();
+  watch(material, ({ progression }) => {
+    if (mode.value !== 'progression') return;
+    engine.value?.revise(progressionSchedule(progression, tempoBpm), loudest());
   });
+  watch([sections, engine], () => engine.value?.setSections(sections.value));
+  useWaking(() => (mode.value === 'silent' ? null : engine.value));
 
   const signs = { status, mode: readonly(mode), level: readonly(level), playingChordId };
   return {
@@ -87,8 +105,7 @@ export function createPlayback(load: LoadEngine): Playback {
     strike: () => play('strike', strikeSchedule(material.value.sounds)),
     hold: () => hold(WHOLE_CHORD),
     build: () => play('build', buildSchedule(material.value.sounds)),
-    playProgression: () =>
-      play('progression', progressionSchedule(material.value.progression, material.value.tempoBpm)),
+    playProgression,
     hear,
     toggle: (part, section) => void (mix.value = toggled(mix.value, part, section)),
     setVolume,

@@ -183,3 +183,39 @@ test('when the tab has slept, then what was held sounds on, and what was stopped
   await page.evaluate(() => window.soundTape.contexts.at(-1)?.resume());
   await isSilent(page);
 });
+
+/** A part of a recording, in seconds from the first sound in it. */
+function excerpt({ left, right, sampleRate }: Recording, from: number, until: number): Recording {
+  const onset = left.findIndex((sample) => Math.abs(sample) > QUIET);
+  const cut = (samples: Float32Array) => samples.slice(onset + from * sampleRate, onset + until * sampleRate);
+  return { sampleRate, left: cut(left), right: cut(right) };
+}
+
+function strongestLine(sound: Recording): Line {
+  const [strongest] = linesOf(sound);
+  if (!strongest) throw new Error('silence');
+  return strongest;
+}
+
+test('when a progression is played, then its chords follow each other in tempo and the playing one is marked', async ({
+  page,
+}) => {
+  await typeNotes(page, 'Vn1 A4');
+  await page.getByRole('button', { name: 'Add a chord like this one' }).click();
+  await typeNotes(page, 'Vn1 E5');
+  const cards = page.locator('[data-chord]');
+  await rewind(page);
+  await page.getByRole('button', { name: 'Play progression' }).click();
+  await expect(cards.nth(0)).toHaveClass(/sounding/);
+  await expect(cards.nth(1)).toHaveClass(/sounding/);
+  await expect(page.locator('.sounding')).toHaveCount(0);
+  const sound = await recorded(page, 1);
+
+  // Four beats each at 60 a minute; A4 is 440 Hz, E5 seven tempered semitones above it.
+  const chordSeconds = (4 * 60) / 60;
+  const first = strongestLine(excerpt(sound, 0.3, chordSeconds - 0.1));
+  const second = strongestLine(excerpt(sound, chordSeconds + 0.3, 2 * chordSeconds - 0.1));
+  expect(Math.abs(cents(first.frequencyHz / Math.round(first.frequencyHz / 440), 440))).toBeLessThan(1);
+  const e5 = 440 * 2 ** (7 / 12);
+  expect(Math.abs(cents(second.frequencyHz / Math.round(second.frequencyHz / e5), e5))).toBeLessThan(1);
+});

@@ -27,6 +27,11 @@ export class SilentEngine implements SoundEngine {
     this.state = 'playing';
   }
 
+  revise(schedule: readonly TimedSound[], loudest: number): void {
+    this.schedule = schedule;
+    this.loudest = loudest;
+  }
+
   stop(): void {
     this.held = [];
     this.schedule = [];

@@ -136,6 +136,20 @@ describe('playback', () => {
     expect(playback.playingChordId.value).toBeNull();
   });
 
+  it('when a chord is changed while the progression plays, then it is played as it is now, in the same tempo', async () => {
+    const { playback, engine } = readyPlayback();
+    const first = { chordId: 'first', beats: 2, sounds: chord };
+    playback.bring({ sounds: chord, progression: [first, { ...first, chordId: 'second' }], tempoBpm: 120 });
+    await playback.playProgression();
+    const second = { chordId: 'second', beats: 2, sounds: [top] };
+    playback.bring({ sounds: chord, progression: [first, second], tempoBpm: 30 });
+    await nextTick();
+    expect(engine.schedule).toEqual([
+      { key: 'first', startSeconds: 0, seconds: 1, sounds: chord },
+      { key: 'second', startSeconds: 1, seconds: 1, sounds: [top] },
+    ]);
+  });
+
   it('when the tab comes back while something sounds, then the sound is woken, otherwise not', async () => {
     const { playback, engine } = readyPlayback();
     await playback.hold();
