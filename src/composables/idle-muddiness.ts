@@ -12,10 +12,12 @@ interface Waiting {
 
 /** Where the browser has no idle callback, a moment that lets it paint in between. */
 const BETWEEN_MS = 16;
+/** On a busy machine the profiles come all the same. */
+const LATEST_MS = 300;
 
 function whenIdle(work: () => void): () => void {
   if (typeof requestIdleCallback === 'function') {
-    const handle = requestIdleCallback(work);
+    const handle = requestIdleCallback(work, { timeout: LATEST_MS });
     return () => cancelIdleCallback(handle);
   }
   const handle = setTimeout(work, BETWEEN_MS);

@@ -44,7 +44,7 @@ export function createSiltlineRouter(): Router {
   router.beforeEach(admit);
   router.afterEach((to, from, failure) => {
     if (failure) return;
-    document.title = to.meta.title ? `${to.meta.title} · ${SITE}` : SITE;
+    if (to.meta.title) document.title = `${to.meta.title} · ${SITE}`;
     const isFirstPage = from.matched.length === 0;
     if (!isFirstPage && to.path !== from.path && !staysInPlace()) void focusHeading();
   });

@@ -2,7 +2,7 @@ import type { RouteRecordRaw } from 'vue-router';
 
 declare module 'vue-router' {
   interface RouteMeta {
-    /** Of the browser's tab. */
+    /** Of the browser's tab; a page without one names it itself. */
     title?: string;
     /** Who may come: only those signed in, only those who are not, or only in the demonstration. */
     for?: 'account' | 'visitor' | 'demo';
@@ -13,7 +13,7 @@ const lab = () => import('@/pages/LabPage.vue').then((module) => module.default)
 
 export const routes: RouteRecordRaw[] = [
   { path: '/', name: 'lab', component: lab, meta: { title: 'Lab' } },
-  { path: '/studies/:studyId', name: 'study', component: lab, meta: { title: 'Study', for: 'account' } },
+  { path: '/studies/:studyId', name: 'study', component: lab, meta: { for: 'account' } },
   {
     path: '/studies',
     name: 'studies',
