@@ -115,7 +115,8 @@ describe('the lanes', () => {
 
   it('when a section’s head is pressed, then it begins with a note of its own', async () => {
     const { wrapper } = lanesOf('');
-    await wrapper.get('button[aria-label^="cellos"]').trigger('click');
+    const heads = wrapper.findAll('button');
+    await heads.find((head) => head.text().includes('cellos'))?.trigger('click');
     expect(wrapper.emitted('put')).toEqual([['cello', null]]);
   });
 
