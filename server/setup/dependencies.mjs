@@ -37,7 +37,7 @@ export function installDependencies() {
   // Whatever interrupts the installation, it is then known to be incomplete.
   rmSync(INSTALLED, { force: true });
   const npm = process.env.npm_execpath ? [process.execPath, process.env.npm_execpath] : ['npm'];
-  const [command, ...words] = [...npm, 'ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'];
+  const [command, ...words] = [...npm, 'ci', '--include=dev', '--prefer-offline', '--loglevel=error'];
   const { status, error } = spawnSync(command, words, {
     cwd: ROOT,
     env: environment(),

@@ -22,7 +22,14 @@ const commands = [
 const children = commands.map((words) =>
   spawn(process.execPath, words, { cwd: ROOT, env, stdio: 'inherit' }),
 );
-const stop = (signal) => children.forEach((child) => child.kill(signal));
+let stopping = false;
+
+/** Once: at a second signal the watcher kills the server in the middle of its closing. */
+function stop(signal) {
+  if (stopping) return;
+  stopping = true;
+  for (const child of children) child.kill(signal);
+}
 
 for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => stop(signal));
 for (const child of children) child.on('exit', () => stop('SIGTERM'));
