@@ -12,6 +12,7 @@ export interface CostParts {
   readonly orderings: number;
   readonly ratings: number;
   readonly chords: number;
+  readonly steadiness: number;
 }
 
 /** Orderings must hold by 1. */
@@ -37,6 +38,13 @@ const MIDDLE_TRIAD_TOP = 55;
 /** Points of the index that cost one. */
 const INDEX_UNIT = 5;
 const CHORD_WEIGHT = 0.5;
+/** All dynamics changed alike must move the index by less than 1. */
+const DYNAMICS_MOVE = 0.8;
+const DYNAMICS_UNIT = 0.2;
+/** An octave lower may be clearer by 8 % at most, and seldom. */
+const RIPPLE = 0.05;
+const RIPPLE_UNIT = 0.02;
+const STEADINESS_WEIGHT = 0.2;
 
 /** @returns the parts of the cost; their sum is what the fit makes small */
 export function costParts(judgement: Judgement): CostParts {
@@ -57,13 +65,18 @@ export function costParts(judgement: Judgement): CostParts {
     orderings: ORDERING_WEIGHT * excess(judgement.orderings.map((margin) => ORDERING_MARGIN - margin)),
     ratings: CORRELATION_WEIGHT * excess([(judgement.correlation - CORRELATION) / CORRELATION_UNIT]),
     chords: CHORD_WEIGHT * excess(chords.map((points) => points / INDEX_UNIT)),
+    steadiness:
+      STEADINESS_WEIGHT *
+      excess([
+        (judgement.dynamicsMove - DYNAMICS_MOVE) / DYNAMICS_UNIT,
+        (judgement.largestRipple - RIPPLE) / RIPPLE_UNIT,
+      ]),
   };
 }
 
 /** @returns the whole cost */
 export function costOf(judgement: Judgement): number {
-  const { limits, orderings, ratings, chords } = costParts(judgement);
-  return limits + orderings + ratings + chords;
+  return Object.values(costParts(judgement)).reduce((sum: number, part: number) => sum + part, 0);
 }
 
 /** Σ x² over what exceeds 0. */

@@ -18,22 +18,22 @@ export const FITTED = [
 export type Fitted = (typeof FITTED)[number];
 
 /**
- * Where the fit begins: round figures. Sharpness, pooling and reach are the form's and stay: a square root of
+ * Where the fit begins: round figures near the best of a wide search by chance. Sharpness, pooling and reach are the form's and stay: a square root of
  * the curve fits the chart best of the powers tried, 1.5 lets the cloudiest pairs govern without hiding the
  * others, and at 3.5 bandwidths the curve has died away.
  */
 export const START: Untuned = {
-  peakErb: 0.2,
+  peakErb: 0.18,
   sharpness: 0.5,
   reachErb: 3.5,
-  fusionErb: 0.05,
-  fusionStrength: 8,
+  fusionErb: 0.057,
+  fusionStrength: 9,
   pooling: 1.5,
-  floor: 0.2,
-  cornerHz: 110,
+  floor: 0.15,
+  cornerHz: 115,
   slope: 4,
-  windowSemitones: 3,
-  localWindowSemitones: 3.5,
+  windowSemitones: 2.75,
+  localWindowSemitones: 3.4,
 };
 
 /** How far the fit goes. */
@@ -45,7 +45,7 @@ export interface FitRange {
   readonly mostRounds: number;
 }
 
-export const WHOLE_FIT: FitRange = { step: 0.12, smallestStep: 0.006, mostRounds: 60 };
+export const WHOLE_FIT: FitRange = { step: 0.06, smallestStep: 0.006, mostRounds: 60 };
 /** From the whole fit's constants a fit without one interval has not far to go. */
 export const REFIT: FitRange = { step: 0.03, smallestStep: 0.012, mostRounds: 6 };
 

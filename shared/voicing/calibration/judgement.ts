@@ -10,6 +10,7 @@ import {
 } from '#shared/data/model-chords';
 import { MUDDY_REGISTERS, REGISTER_RATINGS } from '#shared/data/register-ratings';
 import { SCORE_CHORDS } from '#shared/data/score-chords';
+import type { Midi } from '#shared/units';
 import { correlation } from '#shared/voicing/calibration/statistics';
 import { limitCurves } from '#shared/voicing/calibration/limit-curves';
 import type { LimitFit } from '#shared/voicing/calibration/threshold';
@@ -22,9 +23,9 @@ import {
 } from '#shared/voicing/calibration/yardsticks';
 import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
 import type { MuddinessVoice } from '#shared/voicing/muddiness/model';
-import { muddinessModel } from '#shared/voicing/muddiness/model';
+import { muddinessModel, peakDensity } from '#shared/voicing/muddiness/model';
 import { AXIS_STEP } from '#shared/voicing/muddiness/models';
-import { indexOf, peakDensity } from '#shared/voicing/muddiness/scores';
+import { indexOf } from '#shared/voicing/muddiness/scores';
 
 /** How a set of constants does by every yardstick. */
 export interface Judgement {
@@ -40,6 +41,10 @@ export interface Judgement {
   readonly passingChords: readonly number[];
   readonly clearTriad: number;
   readonly middleTriad: number;
+  /** By how much the middle triad moves from the softest dynamic to the loudest. */
+  readonly dynamicsMove: number;
+  /** The most by which an octave lower is clearer, as a part of ρ: 0 where it never is. */
+  readonly largestRipple: number;
 }
 
 /** Constants before the threshold is found. */
@@ -82,7 +87,29 @@ export function judge(untuned: Untuned, chart: readonly LowIntervalLimit[] = LOW
     passingChords: PASSING_CHORDS.map((chord) => index(namedVoicing(chord))),
     clearTriad: index(namedVoicing(CLEAR_TRIAD)),
     middleTriad: index(namedVoicing(MIDDLE_TRIAD)),
+    dynamicsMove: Math.abs(
+      index(namedVoicing(MIDDLE_TRIAD, 'fff')) - index(namedVoicing(MIDDLE_TRIAD, 'ppp')),
+    ),
+    largestRipple: largestRipple(density),
   };
+}
+
+/** Intervals and lower notes among which an octave lower was seen to come out clearer, in trials. */
+const RIPPLING_INTERVALS = 9;
+const RIPPLING_FROM: Midi = 36;
+const RIPPLING_TO: Midi = 54;
+const OCTAVE = 12;
+
+function largestRipple(density: (voices: readonly MuddinessVoice[]) => number): number {
+  let largest = 0;
+  for (let semitones = 1; semitones <= RIPPLING_INTERVALS; semitones += 1) {
+    for (let lower = RIPPLING_FROM; lower <= RIPPLING_TO; lower += 1) {
+      const high = density(voicingOf([lower, lower + semitones]));
+      const low = density(voicingOf([lower - OCTAVE, lower - OCTAVE + semitones]));
+      largest = Math.max(largest, 1 - low / high);
+    }
+  }
+  return largest;
 }
 
 /**

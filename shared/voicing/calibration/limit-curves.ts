@@ -2,7 +2,7 @@ import type { LowIntervalLimit } from '#shared/data/low-interval-limits';
 import type { Midi } from '#shared/units';
 import { twoCelloSections } from '#shared/voicing/calibration/yardsticks';
 import type { MuddinessModel } from '#shared/voicing/muddiness/model';
-import { peakDensity } from '#shared/voicing/muddiness/scores';
+import { peakDensity } from '#shared/voicing/muddiness/model';
 
 /** How cloudy an interval is at each placing, from the lowest to the highest lower note tried. */
 export interface LimitCurve {

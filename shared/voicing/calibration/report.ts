@@ -6,6 +6,7 @@ import { correlationInterval, mean } from '#shared/voicing/calibration/statistic
 import type { LeaveOneOut } from '#shared/voicing/calibration/uncertainty';
 
 const DIGITS = 2;
+const PERCENT = 100;
 const NAME_WIDTH = 8;
 const FIGURE_WIDTH = 10;
 
@@ -23,7 +24,7 @@ export function calibrationReport(judgement: Judgement, left: LeaveOneOut): read
 }
 
 function limitLines({ limits }: Judgement, left: LeaveOneOut): readonly string[] {
-  const head = ['interval', 'chart', 'model', 'model-chart', 'from variant', 'left out'];
+  const head = ['interval', 'chart', 'model', 'off chart', 'off variant', 'left out'];
   const lines = limits.comparisons.map(({ limit, model, fromChart, fromVariant }, i) => [
     limit.interval,
     String(limit.lowestMidi),
@@ -60,6 +61,8 @@ function chordLines(judgement: Judgement): readonly string[] {
     `close low chords         ${list(judgement.closeChords)}`,
     `chords passing a limit   ${list(judgement.passingChords)}`,
     `C4 E4 G4, C3 E3 G3       ${judgement.clearTriad.toFixed(DIGITS)}, ${judgement.middleTriad.toFixed(DIGITS)}`,
+    `from ppp to fff          ${judgement.dynamicsMove.toFixed(DIGITS)} points`,
+    `octave lower, clearer    ${(judgement.largestRipple * PERCENT).toFixed(DIGITS)} % at most`,
   ];
 }
 

@@ -1,13 +1,12 @@
-import { FORTE_POWER_LEVEL } from '#shared/data/player-levels';
 import type { ScoreChord } from '#shared/data/score-chords';
 import { midiOfName } from '#shared/pitch/names';
 import { equalTempered } from '#shared/pitch/tuning';
 import type { Instrument, Section } from '#shared/strings/sections';
 import { SECTION_FACTS } from '#shared/strings/sections';
-import type { Ensemble, Technique } from '#shared/study/study.document';
+import type { Dynamic, Ensemble, Technique } from '#shared/study/study.document';
 import { DEFAULT_ENSEMBLE } from '#shared/study/study.document';
 import type { Hertz, Midi } from '#shared/units';
-import { playersGain } from '#shared/acoustics/level';
+import { nominalLevel } from '#shared/acoustics/level';
 import type { Joinable } from '#shared/voicing/muddiness/joined';
 import { joinUnisons } from '#shared/voicing/muddiness/joined';
 import type { MuddinessVoice } from '#shared/voicing/muddiness/model';
@@ -31,16 +30,16 @@ export function sectionFor(midi: Midi): Section {
   return midi < C4 ? 'viola' : 'violin1';
 }
 
-/** A section's note, bowed ordinarily at mf in equal temperament. */
-function noteOf(instrument: Instrument, midi: Midi, players: number): Joinable {
+/** A section's note, bowed ordinarily in equal temperament. */
+function noteOf(instrument: Instrument, midi: Midi, players: number, dynamic: Dynamic = 'mf'): Joinable {
   const f0Hz = equalTempered(midi, CALIBRATION_A4);
   return {
-    toneKey: `${instrument} ordinary mf ${f0Hz}`,
+    toneKey: `${instrument} ordinary ${dynamic} ${f0Hz}`,
     f0Hz,
     instrument,
     technique: ORDINARY,
-    dynamic: 'mf',
-    nominalDb: FORTE_POWER_LEVEL[instrument] - FORTE_POWER_LEVEL.violin + playersGain(players),
+    dynamic,
+    nominalDb: nominalLevel(instrument, dynamic, ORDINARY, players),
   };
 }
 
@@ -54,14 +53,16 @@ export function twoCelloSections(lower: Midi, semitones: number): readonly Muddi
 }
 
 /** A voicing of one section a note, each of eight players. */
-export function voicingOf(midi: readonly Midi[]): readonly MuddinessVoice[] {
-  const notes = midi.map((note) => noteOf(SECTION_FACTS[sectionFor(note)].instrument, note, PLAYERS));
+export function voicingOf(midi: readonly Midi[], dynamic: Dynamic = 'mf'): readonly MuddinessVoice[] {
+  const notes = midi.map((note) =>
+    noteOf(SECTION_FACTS[sectionFor(note)].instrument, note, PLAYERS, dynamic),
+  );
   return joinUnisons(notes, CALIBRATION_A4);
 }
 
 /** The same from names: `C2 G2 E3`. */
-export function namedVoicing(names: string): readonly MuddinessVoice[] {
-  return voicingOf(names.split(' ').map(midiOfName));
+export function namedVoicing(names: string, dynamic: Dynamic = 'mf'): readonly MuddinessVoice[] {
+  return voicingOf(names.split(' ').map(midiOfName), dynamic);
 }
 
 /** A chord of a score: the notes of one part share its players. */

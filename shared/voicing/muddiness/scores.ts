@@ -1,8 +1,6 @@
 import type { Midi } from '#shared/units';
 import type { PitchAxis } from '#shared/voicing/muddiness/axis';
 import { AXIS_LOW, pitchAt } from '#shared/voicing/muddiness/axis';
-import type { MuddinessModel, MuddinessVoice } from '#shared/voicing/muddiness/model';
-import { pooledAt, sumsOf } from '#shared/voicing/muddiness/model';
 import type { Register } from '#shared/voicing/registers';
 import { REGISTER_BOUNDS } from '#shared/voicing/registers';
 
@@ -44,12 +42,4 @@ export function cloudiestOf(peaks: readonly RegisterPeak[]): RegisterPeak | null
     (best, peak) => (peak.density > (best?.density ?? 0) ? peak : best),
     null,
   );
-}
-
-/** @returns the highest ρ of a chord anywhere on the axis */
-export function peakDensity(model: MuddinessModel, voices: readonly MuddinessVoice[]): number {
-  const sums = sumsOf(model, voices);
-  let highest = 0;
-  for (let x = 0; x < model.axis.count; x += 1) highest = Math.max(highest, pooledAt(sums, x, model));
-  return highest ** (1 / model.constants.pooling);
 }
