@@ -1,4 +1,4 @@
-import { COMMON_PASSWORDS } from '#server/accounts/common-passwords';
+import { COMMON_PASSWORDS, COMMON_WORDS } from '#server/accounts/common-passwords';
 
 const APP_NAME = 'siltline';
 /** A name of three letters is in too many words to be refused for it. */
@@ -20,17 +20,17 @@ function ownWords({ name, email }: Person): string[] {
 
 /** What is left of `Password1!` and of `2024dragon` when the usual dressing is taken off. */
 function withoutDressing(password: string): string {
-  return password.replace(/^[\d\W_]{0,4}|[\d\W_]{0,4}$/gu, '');
+  return password.replace(/^[\d\W_]{0,6}|[\d\W_]{0,6}$/gu, '');
 }
 
 /** @returns what speaks against a password, as a sentence; null when nothing does. */
 export function passwordFault(password: string, person: Person): string | null {
   const lower = password.toLowerCase();
-  if (COMMON_PASSWORDS.has(lower) || COMMON_PASSWORDS.has(withoutDressing(lower))) {
+  const core = withoutDressing(lower);
+  if ([lower, core].some((word) => COMMON_PASSWORDS.has(word)) || COMMON_WORDS.has(core)) {
     return 'this password is among the first that are tried: take another';
   }
   if (new Set(lower).size < FEWEST_DIFFERENT) return 'a password needs more different characters';
-  const core = withoutDressing(lower);
   if ([APP_NAME, ...ownWords(person)].includes(core) || lower.includes(APP_NAME)) {
     return 'a password must not be your own name, your address or the name of this program';
   }
