@@ -57,7 +57,6 @@ export function sourceOf(
   const { instrument } = SECTION_FACTS[section];
   const tuning = { a4Hz: settings.a4Hz, intonation: settings.intonation, tonic: settings.key.tonic, bass };
   const f0Hz = harmonicFrequency(voice, settings.ensemble.bass, settings.a4Hz) ?? frequencyOf(pitch, tuning);
-  const { contact, mute, stroke, harmonic } = technique;
   return {
     id,
     section,
@@ -68,9 +67,15 @@ export function sourceOf(
     dynamic,
     instrument,
     f0Hz,
-    toneKey: `${instrument} ${contact} ${String(mute)} ${stroke} ${harmonic} ${dynamic} ${f0Hz}`,
+    toneKey: toneKey({ instrument, technique, dynamic, f0Hz }),
     nominalDb: nominalLevel(instrument, dynamic, technique, players),
   };
+}
+
+/** @returns what tells a tone's shape from others */
+export function toneKey({ instrument, technique, dynamic, f0Hz }: ToneSource): string {
+  const { contact, mute, stroke, harmonic } = technique;
+  return `${instrument} ${contact} ${String(mute)} ${stroke} ${harmonic} ${dynamic} ${f0Hz}`;
 }
 
 /**

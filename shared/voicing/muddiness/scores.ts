@@ -43,3 +43,11 @@ export function cloudiestOf(peaks: readonly RegisterPeak[]): RegisterPeak | null
     null,
   );
 }
+
+/** The highest index that is told from 100: beyond it ρ is over fifty times the threshold. */
+const HIGHEST_INDEX = 100 - 1e-13;
+
+/** @returns ρ of an index, the inverse of {@link indexOf} */
+export function densityOfIndex(index: number, threshold: number): number {
+  return -threshold * Math.log2(1 - Math.min(index, HIGHEST_INDEX) / FULL);
+}
