@@ -20,7 +20,7 @@ function ownWords({ name, email }: Person): string[] {
 
 /** What is left of `Password1!` and of `2024dragon` when the usual dressing is taken off. */
 function withoutDressing(password: string): string {
-  return password.replace(/^[\d\W_]{0,6}|[\d\W_]{0,6}$/gu, '');
+  return password.replace(/^\P{L}{0,6}|\P{L}{0,6}$/gu, '');
 }
 
 /** @returns what speaks against a password, as a sentence; null when nothing does. */
