@@ -11,6 +11,7 @@ import { cloudiestOf, indexOf, registerPeaks } from '#shared/voicing/muddiness/s
 import type { Register } from '#shared/voicing/registers';
 import type { VoiceSource } from '#shared/voicing/sound';
 import { soundOf, sourcesOf } from '#shared/voicing/sound';
+import { uncertaintyOf } from '#shared/voicing/uncertainty';
 
 /** What the sound of a chord depends on besides its voices. */
 export interface SoundSettings {
@@ -87,6 +88,8 @@ export interface ChordAnalysis {
     /** Of the chord: its cloudiest register's. */
     readonly index: number;
     readonly register: Register | null;
+    /** Half the width of the band in which the index may lie, points: see bandOf. */
+    readonly uncertainty: number;
     /** All seven, low to high. */
     readonly registers: readonly RegisterMuddiness[];
   };
@@ -110,11 +113,13 @@ export function analyseChord(chord: Chord, settings: SoundSettings): ChordAnalys
   const peaks = registerPeaks(densityOf(model, joined), model.axis);
   const cloudiest = cloudiestOf(peaks);
   const { threshold } = model.constants;
+  const index = indexOf(cloudiest?.density ?? 0, threshold);
   return {
     voices: sources.map((source) => soundOf(source, shapeOf(source, model))),
     muddiness: {
-      index: indexOf(cloudiest?.density ?? 0, threshold),
+      index,
       register: cloudiest?.register ?? null,
+      uncertainty: uncertaintyOf(index),
       registers: peaks.map(({ register, density, at }) => ({
         register,
         index: indexOf(density, threshold),
@@ -124,6 +129,25 @@ export function analyseChord(chord: Chord, settings: SoundSettings): ChordAnalys
     limits: limitFindings(sources),
     pairs: cloudiest ? explainPeak(cloudiest, sources, joined, model) : [],
   };
+}
+
+/**
+ * Which pairs of notes, and which of their partials, make one register's clouding at its cloudiest place.
+ * @returns shares that add up to 1, largest first; empty where nothing clouds there
+ * @throws RangeError where a pitch or the tonic is not a note
+ */
+export function explainRegister(
+  chord: Chord,
+  settings: SoundSettings,
+  register: Register,
+): readonly PairShare[] {
+  const model = modelFor(settings.a4Hz);
+  const sources = sourcesOf(chord, settings);
+  const joined = joinUnisons(sources, settings.a4Hz);
+  const peak = registerPeaks(densityOf(model, joined), model.axis).find(
+    (found) => found.register === register,
+  );
+  return peak && peak.density > 0 ? explainPeak(peak, sources, joined, model) : [];
 }
 
 function shapeOf(source: VoiceSource, { tables, a4Hz }: MuddinessModel): readonly Partial[] {

@@ -1,16 +1,17 @@
-import { midiOfFrequency } from '#shared/pitch/tuning';
+import { equalTempered, midiOfFrequency } from '#shared/pitch/tuning';
 import type { PairShare, PartialMeeting, VoiceSound } from '#shared/voicing/analysis';
 import { AXIS_LOW, windowValue } from '#shared/voicing/muddiness/axis';
 import type { JoinedVoice } from '#shared/voicing/muddiness/joined';
 import type { MuddinessEntry, MuddinessModel } from '#shared/voicing/muddiness/model';
 import { entryOf } from '#shared/voicing/muddiness/model';
-import { forEachMeeting } from '#shared/voicing/muddiness/pairs';
 import type { RegisterPeak } from '#shared/voicing/muddiness/scores';
 import type { Tone } from '#shared/voicing/muddiness/tones';
-import { cloudingAt } from '#shared/voicing/muddiness/tones';
+import { cloudingAt, distanceErb } from '#shared/voicing/muddiness/tones';
 
 /** The partials that a reader can take in at once. */
 const MEETINGS_SHOWN = 3;
+/** Farther from the place than this many widths the window is under a hundred-thousandth. */
+const WINDOW_WIDTHS = 2.5;
 
 /**
  * Which pairs of notes, and which of their partials, make the clouding at a register's cloudiest place.
@@ -84,18 +85,26 @@ function meetingsOf(
   { constants, axis, a4Hz }: MuddinessModel,
 ): readonly PartialMeeting[] {
   const place = AXIS_LOW + axis.step * peak.point;
+  const reach = constants.windowSemitones * WINDOW_WIDTHS;
+  const nearest = { low: equalTempered(place - reach, a4Hz), high: equalTempered(place + reach, a4Hz) };
   const found: PartialMeeting[] = [];
   let whole = 0;
-  forEachMeeting(lower, upper, constants.reachErb, (i, j, y) => {
+  for (let i = 0; i < lower.frequencies.length; i += 1) {
     const a = lower.frequencies[i] ?? 0;
-    const b = upper.frequencies[j] ?? 0;
-    const weight = windowValue(midiOfFrequency((a + b) / 2, a4Hz) - place, constants.windowSemitones);
-    const amplitude = (lower.amplitudes[i] ?? 0) * (upper.amplitudes[j] ?? 0);
-    const clouding = amplitude * cloudingAt(y, constants) * weight;
-    if (clouding <= 0) return;
-    whole += clouding;
-    keepLargest(found, { lowerN: i + 1, upperN: j + 1, differenceHz: Math.abs(a - b), share: clouding });
-  });
+    if (a > 2 * nearest.high) break;
+    for (let j = 0; j < upper.frequencies.length; j += 1) {
+      const b = upper.frequencies[j] ?? 0;
+      const mean = (a + b) / 2;
+      if (mean > nearest.high) break;
+      if (mean < nearest.low) continue;
+      const weight = windowValue(midiOfFrequency(mean, a4Hz) - place, constants.windowSemitones);
+      const amplitude = (lower.amplitudes[i] ?? 0) * (upper.amplitudes[j] ?? 0);
+      const clouding = amplitude * cloudingAt(distanceErb(a, b), constants) * weight;
+      if (clouding <= 0) continue;
+      whole += clouding;
+      keepLargest(found, { lowerN: i + 1, upperN: j + 1, differenceHz: Math.abs(a - b), share: clouding });
+    }
+  }
   return found.map((meeting) => ({ ...meeting, share: meeting.share / whole }));
 }
 
