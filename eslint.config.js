@@ -31,7 +31,10 @@ export default ts.config(
     files: ['**/*.vue'],
     rules: { 'vue/no-v-html': 'error', 'vue/multi-word-component-names': 'off' },
   },
-  { files: ['shared/**'], rules: never('^(node:|vue|express|@/|#server)', 'shared/ is pure: no DOM, no Node, no framework.') },
+  {
+    files: ['shared/**'],
+    rules: never('^(node:|vue|express|@/|#server)', 'shared/ is pure: no DOM, no Node, no framework.'),
+  },
   { files: ['src/**'], rules: never('(^|/)server/|^#server|^node:', 'The client never imports the server.') },
   { files: ['server/**'], rules: never('(^|/)src/|^@/', 'The server never imports the client.') },
   { files: ['*.config.{js,ts}', 'src/**/*.d.ts'], rules: { 'no-restricted-exports': 'off' } },
