@@ -22,6 +22,8 @@ export function useStudyDesk() {
   const bench = useBenchStore();
   const study = shallowRef<Study | null>(null);
   const status = ref<LoadStatus>('idle');
+  /** Whose desk it is: still theirs when their session has ended. */
+  const accountId = ref<string | null>(null);
   /** Why a study could not be opened. */
   const problem = ref<string | null>(null);
   /** What was asked for last: an answer that comes late opens nothing. */
@@ -48,7 +50,7 @@ export function useStudyDesk() {
   const saveProblem = computed(() => failure.value?.message ?? unfinished.value);
 
   const around = { bench, session: useSessionStore(), storage: browserStorage() };
-  const opening = { study, status, problem, wantedId, basedOn };
+  const opening = { accountId, study, status, problem, wantedId, basedOn };
   const saving = { sending, inFlight, failure, failures, conflict, unfinished, keptInBrowser };
   return { ...around, ...opening, ...saving, maySave, hasUnsaved, saveState, saveProblem };
 }
@@ -57,6 +59,7 @@ export type StudyDesk = ReturnType<typeof useStudyDesk>;
 /** Lays a study on the desk with nothing on its way. */
 export function layOut(desk: StudyDesk, study: Study | null): void {
   desk.study.value = study;
+  desk.accountId.value = desk.session.account?.id ?? desk.accountId.value;
   desk.basedOn.value = study?.number ?? 0;
   desk.sending.value = null;
   desk.failure.value = null;

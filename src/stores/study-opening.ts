@@ -10,7 +10,7 @@ import { finishedDocument, flush, settle } from '@/stores/study-saving';
 
 /** Puts back what this person left unsaved here, on top of the study as the server has it. */
 function takeUpWork(desk: StudyDesk, opened: Study): void {
-  const work = desk.maySave.value ? readWork(desk.storage, opened.id, desk.session.account?.id ?? '') : null;
+  const work = desk.maySave.value ? readWork(desk.storage, opened.id, desk.accountId.value ?? '') : null;
   if (!work) return;
   if (sameStudy(work.document, opened.document)) {
     forgetWork(desk.storage, opened.id);

@@ -16,10 +16,10 @@ const PAUSE_MS = 1500;
 
 /** Keeps in the browser what would be lost if the page closed now. */
 export function keep(desk: StudyDesk): void {
-  const [open, account] = [desk.study.value, desk.session.account];
-  if (!open || !account) return;
+  const [open, accountId] = [desk.study.value, desk.accountId.value];
+  if (!open || !accountId) return;
   desk.keptInBrowser.value = writeWork(desk.storage, open.id, {
-    accountId: account.id,
+    accountId,
     basedOn: desk.basedOn.value,
     document: desk.bench.study,
     pending: desk.sending.value?.body ?? null,
@@ -48,8 +48,8 @@ function prepare(desk: StudyDesk): Sending | null {
 }
 
 /** A study that was left while its save was on its way: what the save did not hold stays kept. */
-function acceptElsewhere({ storage, session }: StudyDesk, sent: Sending, saved: Study): void {
-  const work = readWork(storage, saved.id, session.account?.id ?? '');
+function acceptElsewhere({ storage, accountId }: StudyDesk, sent: Sending, saved: Study): void {
+  const work = readWork(storage, saved.id, accountId.value ?? '');
   if (!work || sameStudy(work.document, sent.body.document)) forgetWork(storage, saved.id);
   else writeWork(storage, saved.id, { ...work, basedOn: saved.number, pending: null });
 }
@@ -126,7 +126,9 @@ export function useSavingByItself(desk: StudyDesk): void {
   watch(desk.failures, (count) => (count > 0 ? retry.start() : retry.stop()));
   watch(
     () => desk.session.account?.id,
-    () => void flush(desk),
+    (id) => {
+      if (id !== undefined && id === desk.accountId.value) void flush(desk);
+    },
   );
   useEventListener(globalThis, 'online', () => void flush(desk));
 }

@@ -1,7 +1,7 @@
 import { defineStore } from 'pinia';
 import { computed } from 'vue';
 import { mayDoToStudy, type StudyAction } from '#shared/contracts/permissions';
-import { forgetAllWork } from '@/stores/kept-work';
+import { forgetAllWork, forgetWorkOfOthers } from '@/stores/kept-work';
 import { keepMine, keepMineAsNew, takeTheirs } from '@/stores/study-conflict';
 import { layOut, useStudyDesk } from '@/stores/study-desk';
 import { copyAsOwn, open, openDraft, saveDraft } from '@/stores/study-opening';
@@ -20,8 +20,19 @@ export const useStudyStore = defineStore('study', () => {
   /** Forgets everything of whoever was here. */
   function forget(): void {
     layOut(desk, null);
+    desk.accountId.value = null;
     desk.status.value = 'idle';
     forgetAllWork(desk.storage);
+  }
+
+  /** Clears the desk for whoever comes, unless it is theirs already. */
+  function clearFor(accountId: string): void {
+    if (desk.accountId.value !== null && desk.accountId.value !== accountId) {
+      layOut(desk, null);
+      openDraft(desk);
+    }
+    desk.accountId.value = accountId;
+    forgetWorkOfOthers(desk.storage, accountId);
   }
 
   const { study, status, problem, conflict, keptInBrowser, maySave, hasUnsaved, saveState, saveProblem } =
@@ -37,5 +48,6 @@ export const useStudyStore = defineStore('study', () => {
     takeTheirs: () => takeTheirs(desk),
     keepMineAsNew: () => keepMineAsNew(desk),
     forget,
+    clearFor,
   };
 });

@@ -2,10 +2,9 @@ import { useRoute, useRouter } from 'vue-router';
 import { notice } from '@/composables/notices';
 import { nextPath } from '@/router/next';
 import { adoptDraft } from '@/stores/draft-adoption';
-import { browserStorage } from '@/stores/draft-storage';
-import { forgetWorkOfOthers } from '@/stores/kept-work';
 import { sessionChannel } from '@/stores/session-channel';
 import { useSessionStore } from '@/stores/session.store';
+import { useStudyStore } from '@/stores/study.store';
 
 /** Signs in and goes on: to the study that the draft became, to where one was sent from, or to the studies. */
 export function useEntering() {
@@ -15,7 +14,7 @@ export function useEntering() {
 
   async function enter(email: string, password: string): Promise<void> {
     const account = await session.signIn(email, password);
-    forgetWorkOfOthers(browserStorage(), account.id);
+    useStudyStore().clearFor(account.id);
     sessionChannel().tell('signed-in');
     const adopted = await adoptDraft(account);
     if (adopted.kind === 'adopted') {
