@@ -1,6 +1,7 @@
 import type { DraftDocument } from '#shared/study/draft';
 import { emptyChord } from '#shared/study/new-study';
 import { MAX_CHORDS, type Chord } from '#shared/study/study.document';
+import { respell } from '#shared/study/voices.changes';
 
 /** What of a study may be set by itself. */
 export type StudySettings = Partial<Omit<DraftDocument, 'schemaVersion' | 'chords'>>;
@@ -54,6 +55,11 @@ export function reorderChord(study: DraftDocument, chordId: string, place: numbe
   if (!chord || study.chords[place] === chord) return study;
   const rest = study.chords.filter((other) => other !== chord);
   return { ...study, chords: rest.toSpliced(Math.max(place, 0), 0, chord) };
+}
+
+/** @returns the study with every note of every chord spelt by its key */
+export function respellStudy(study: DraftDocument): DraftDocument {
+  return { ...study, chords: study.chords.map((chord) => respell(chord, study.key)) };
 }
 
 /** @returns whether no chord of the study has a note */

@@ -73,6 +73,11 @@ export function moveVoice(chord: Chord, voiceId: string, midi: Midi, key: Spelli
   );
 }
 
+/** @returns the chord with every note spelt as the key wants it; they sound as before */
+export function respell(chord: Chord, key: SpellingKey): Chord {
+  return { ...chord, voices: chord.voices.map((voice) => movedBy(voice, 0, key)) };
+}
+
 /** @returns the chord with some of a voice's settings changed; its linked voices stay as they are */
 export function setVoice(chord: Chord, voiceId: string, settings: VoiceSettings): Chord {
   return mapVoice(chord, voiceId, (voice) => ({ ...voice, ...settings }));

@@ -26,7 +26,7 @@ export interface OvertonesInput {
 }
 
 /** One partial as it is drawn. */
-interface Tick {
+export interface Tick {
   readonly voice: VoiceSound;
   readonly n: number;
   readonly frequencyHz: number;
@@ -71,33 +71,48 @@ function ticksOf({ voices, axis, midiOf }: OvertonesInput): readonly Tick[] {
     .sort((a, b) => b.level - a.level);
 }
 
-function pointsOf(ticks: readonly Tick[]): Point[] {
-  return ticks.flatMap(({ level, y }) => [
-    { x: FLOOR_DB, y },
-    { x: level, y },
-    { x: NaN, y: NaN },
-  ]);
+/** A point of the plot that knows which partial it ends. */
+export interface TickPoint extends Point {
+  readonly tick: Tick | null;
+}
+
+/** From the left to the level; the third point breaks the line. */
+function lineOf(tick: Tick): TickPoint[] {
+  return [
+    { x: FLOOR_DB, y: tick.y, tick: null },
+    { x: tick.level, y: tick.y, tick },
+    { x: NaN, y: NaN, tick: null },
+  ];
 }
 
 /**
  * The overtones of a chord as chart.js draws them: each partial a tick from the left to its level, its
- * section's colour, at the height of its pitch on the bench's axis.
- * @returns data of one set, longest tick first
+ * section's colour, at the height of its pitch on the bench's axis; fundamentals bear their section's mark.
+ * @returns two sets: the marks of the fundamentals, and the ticks, longest first
  */
-export function overtonesData(input: OvertonesInput): ChartData<'scatter', Point[]> {
+export function overtonesData(input: OvertonesInput): ChartData<'scatter', TickPoint[]> {
   const ticks = ticksOf(input);
   const { colours, emphasised } = input;
   const colourOf = ({ voice }: Tick): string =>
     colours.sections[voice.section] + (emphasised.length === 0 || emphasised.includes(voice.id) ? '' : FAINT);
   const tickAt = (index: number): Tick | undefined => ticks[Math.floor(index / POINTS_PER_TICK)];
-  /** The second point of a tick is its end. */
-  const isMark = (index: number): boolean => index % POINTS_PER_TICK === 1 && tickAt(index)?.n === 1;
+  const fundamentals = ticks.filter(({ n }) => n === 1);
   return {
     datasets: [
       {
-        data: pointsOf(ticks),
+        data: fundamentals.map((tick) => ({ x: tick.level, y: tick.y, tick })),
+        pointRadius: 4,
+        pointBorderWidth: 0,
+        pointStyle: fundamentals.map(({ voice }) => MARKS[voice.section]),
+        pointBackgroundColor: fundamentals.map(colourOf),
+      },
+      {
+        data: ticks.flatMap(lineOf),
         showLine: true,
         spanGaps: false,
+        // No option of these points depends on the point, so that chart.js works them out once for all.
+        pointRadius: 0,
+        pointHitRadius: 4,
         borderColor: colours.ink,
         segment: {
           borderColor: ({ p0DataIndex }) => {
@@ -105,15 +120,6 @@ export function overtonesData(input: OvertonesInput): ChartData<'scatter', Point
             return tick && colourOf(tick);
           },
           borderWidth: ({ p0DataIndex }) => (tickAt(p0DataIndex)?.n === 1 ? 3 : 1.5),
-        },
-        pointRadius: ({ dataIndex }) => (isMark(dataIndex) ? 4 : 0),
-        pointHoverRadius: 4,
-        pointHitRadius: 4,
-        pointStyle: ({ dataIndex }) => MARKS[tickAt(dataIndex)?.voice.section ?? 'violin1'],
-        pointBorderWidth: 0,
-        pointBackgroundColor: ({ dataIndex }) => {
-          const tick = tickAt(dataIndex);
-          return tick ? colourOf(tick) : colours.ink;
         },
       },
     ],
@@ -133,13 +139,21 @@ export function levelText(level: Decibels): string {
   return `${Math.round(level)} dB`.replace('-', '−');
 }
 
-/**
- * The chart's scales, pinned to the bench: heights are the axis's own pixels.
- * @param input as for the data
- */
-export function overtonesOptions(input: OvertonesInput): ChartOptions<'scatter'> {
-  const { axis, colours, naming } = input;
-  const ticks = ticksOf(input);
+function tickOf(raw: unknown): Tick | null {
+  // chart.js hands back the very points that overtonesData made.
+  return (raw as TickPoint).tick;
+}
+
+/** What the scales depend on; they stay the same while notes move. */
+export interface OvertonesFrame {
+  /** Height of the bench's axis with its strip, in pixels. */
+  readonly height: number;
+  readonly colours: ChartColours;
+  readonly naming: NoteNaming;
+}
+
+/** The chart's scales, pinned to the bench: heights are the axis's own pixels. */
+export function overtonesOptions({ height, colours, naming }: OvertonesFrame): ChartOptions<'scatter'> {
   return {
     animation: false,
     responsive: true,
@@ -147,24 +161,8 @@ export function overtonesOptions(input: OvertonesInput): ChartOptions<'scatter'>
     layout: { padding: 0, autoPadding: false },
     interaction: { mode: 'nearest', axis: 'xy', intersect: true },
     scales: {
-      x: {
-        min: FLOOR_DB,
-        max: ROOM_DB,
-        afterFit: (scale) => {
-          scale.height = SCALE_HEIGHT;
-        },
-        title: { display: true, text: 'Level [dB]', color: colours.quiet, padding: 0 },
-        ticks: {
-          stepSize: TICK_STEP_DB,
-          includeBounds: false,
-          align: 'inner',
-          color: colours.quiet,
-          callback: (value) => String(value).replace('-', '−'),
-        },
-        grid: { color: colours.line },
-        border: { color: colours.quiet },
-      },
-      y: { display: false, reverse: true, min: 0, max: axis.height },
+      x: levelScale(colours),
+      y: { display: false, ticks: { display: false }, reverse: true, min: 0, max: height },
     },
     plugins: {
       legend: { display: false },
@@ -173,12 +171,34 @@ export function overtonesOptions(input: OvertonesInput): ChartOptions<'scatter'>
         backgroundColor: colours.ink,
         bodyColor: colours.surface,
         callbacks: {
-          label: ({ dataIndex }) => {
-            const tick = ticks[Math.floor(dataIndex / POINTS_PER_TICK)];
+          label: ({ raw }) => {
+            const tick = tickOf(raw);
             return tick ? partialText(tick, naming) : '';
           },
         },
       },
     },
+  };
+}
+
+function levelScale(colours: ChartColours): NonNullable<ChartOptions<'scatter'>['scales']>[string] {
+  return {
+    min: FLOOR_DB,
+    max: ROOM_DB,
+    afterFit: (scale) => {
+      scale.height = SCALE_HEIGHT;
+    },
+    title: { display: true, text: 'Level [dB]', color: colours.quiet, padding: 0 },
+    ticks: {
+      stepSize: TICK_STEP_DB,
+      includeBounds: false,
+      autoSkip: false,
+      maxRotation: 0,
+      align: 'inner',
+      color: colours.quiet,
+      callback: (value) => String(value).replace('-', '−'),
+    },
+    grid: { color: colours.line },
+    border: { color: colours.quiet },
   };
 }

@@ -8,6 +8,7 @@ import {
   isEmptyStudy,
   removeChord,
   reorderChord,
+  respellStudy,
   setStudy,
 } from '#shared/study/study.changes';
 import { chordSchema, draftDocumentSchema, MAX_CHORDS, type Chord } from '#shared/study/study.document';
@@ -148,6 +149,14 @@ describe('changes of a study', () => {
       full = addChordAfter(full, 'chord-1', emptyChord(`more-${full.chords.length}`));
     }
     expect(addChordAfter(full, 'chord-1', emptyChord('too-many'))).toBe(full);
+  });
+
+  it('when the notes are spelt by the key, then they are named anew and sound as before', () => {
+    const sharp = setStudy(
+      changeChord(study, 'chord-1', () => ({ ...chord, voices: [newVoice('voice-1', 'cello', 'A#2')] })),
+      { key: { tonic: 'F', mode: 'major' } },
+    );
+    expect(respellStudy(sharp).chords[0]?.voices.map(({ pitch }) => pitch)).toEqual(['Bb2']);
   });
 
   it('when the tempo is set, then nothing else of the study changes', () => {
