@@ -6,9 +6,10 @@ type Part = Pick<Voice, 'id' | 'section' | 'pitch' | 'players' | 'stop'>;
 
 /** One line of a divided section: a voice, or the voices of a double stop. */
 interface Line {
-  readonly voices: readonly Part[];
-  readonly set: number | null;
-  readonly top: number;
+  readonly ids: string[];
+  /** The players set on it; null where it shares. */
+  set: number | null;
+  top: number;
 }
 
 /**
@@ -23,17 +24,33 @@ interface Line {
  */
 export function playersOf(voices: readonly Part[], ensemble: Ensemble): ReadonlyMap<string, number> {
   const players = new Map<string, number>();
-  for (const section of new Set(voices.map((voice) => voice.section))) {
-    const lines = linesOf(voices, section);
+  for (const [section, lines] of linesBySection(voices)) {
     const free = lines.filter((line) => line.set === null);
     const kept = lines.reduce((sum, line) => sum + (line.set ?? 0), 0);
     const shared = Math.max(ensemble.players[section] - kept, 0);
+    // The highest first, so that the order of the voices does not matter.
+    free.sort((a, b) => b.top - a.top);
     for (const line of lines) {
       const count = line.set ?? shareOf(shared, free.length, free.indexOf(line));
-      for (const voice of line.voices) players.set(voice.id, count);
+      for (const id of line.ids) players.set(id, count);
     }
   }
   return players;
+}
+
+/**
+ * Whether players are shared out evenly in every section, so that no change of pitch can change who has how many.
+ * @param players by voice id, as from playersOf
+ */
+export function isEvenlyShared(voices: readonly Part[], players: ReadonlyMap<string, number>): boolean {
+  const counts = new Map<Section, number>();
+  return voices.every(({ id, section, players: set }) => {
+    const count = players.get(id);
+    const known = counts.get(section);
+    if (set !== null || count === undefined) return false;
+    counts.set(section, count);
+    return known === undefined || known === count;
+  });
 }
 
 function shareOf(players: number, lines: number, place: number): number {
@@ -41,22 +58,21 @@ function shareOf(players: number, lines: number, place: number): number {
   return Math.max(place < players % lines ? even + 1 : even, 1);
 }
 
-/** The lines of a section, the highest first, so that the order of the voices does not matter. */
-function linesOf(voices: readonly Part[], section: Section): readonly Line[] {
-  const groups = new Map<string, Part[]>();
-  for (const voice of voices) {
-    if (voice.section !== section) continue;
-    const key = voice.stop === null ? `voice ${voice.id}` : `stop ${voice.stop}`;
-    groups.set(key, [...(groups.get(key) ?? []), voice]);
+function linesBySection(voices: readonly Part[]): ReadonlyMap<Section, readonly Line[]> {
+  const sections = new Map<Section, Line[]>();
+  const stops = new Map<string, Line>();
+  for (const { id, section, stop, players, pitch } of voices) {
+    const key = `${section} ${stop ?? id}`;
+    const known = stop === null ? undefined : stops.get(key);
+    const line = known ?? { ids: [], set: null, top: -Infinity };
+    line.ids.push(id);
+    line.top = Math.max(line.top, midiOfName(pitch));
+    if (players !== null) line.set = Math.max(line.set ?? 0, players);
+    if (known) continue;
+    stops.set(key, line);
+    const lines = sections.get(section);
+    if (lines) lines.push(line);
+    else sections.set(section, [line]);
   }
-  return [...groups.values()].map(lineOf).sort((a, b) => b.top - a.top);
-}
-
-function lineOf(voices: readonly Part[]): Line {
-  const set = voices.flatMap((voice) => voice.players ?? []);
-  return {
-    voices,
-    set: set.length > 0 ? Math.max(...set) : null,
-    top: Math.max(...voices.map((voice) => midiOfName(voice.pitch))),
-  };
+  return sections;
 }

@@ -1,4 +1,5 @@
 import type { Section } from '#shared/strings/sections';
+import type { Voice } from '#shared/study/study.document';
 
 /** What one can do to a voice: one move at a time. */
 export type MoveKind = 'octaveUp' | 'octaveDown' | 'chordTone' | 'section' | 'leaveOut';
@@ -18,4 +19,18 @@ export interface Move {
 export interface HelpfulMove extends Move {
   readonly before: number;
   readonly after: number;
+}
+
+/** The voices of a chord after a move. */
+export function movedVoices(
+  voices: readonly Voice[],
+  { kind, ids, pitches, section }: Move,
+): readonly Voice[] {
+  if (kind === 'leaveOut') return voices.filter(({ id }) => !ids.includes(id));
+  return voices.map((voice) => {
+    const place = ids.indexOf(voice.id);
+    if (place < 0) return voice;
+    const pitch = pitches[place] ?? voice.pitch;
+    return kind === 'section' ? { ...voice, pitch, section, string: null } : { ...voice, pitch };
+  });
 }
