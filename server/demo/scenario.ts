@@ -34,9 +34,9 @@ const LOW_THIRD: DemoStudy = {
   tempoBpm: 60,
   chords: [
     { name: 'as handed in', beats: 4, line: 'DB C2, Vc E2, Va G3, Vn2 C4, Vn1 E4' },
-    { name: 'third up', beats: 4, line: 'DB C2, Vc G2, Va E3, Vn2 C4, Vn1 G4' },
-    { name: 'octave below', beats: 4, line: 'DB C2, Vc C3, Va G3, Vn2 E4, Vn1 C5' },
+    { name: 'a fifth', beats: 4, line: 'DB C2, Vc G2, Va E3, Vn2 C4, Vn1 G4' },
     { name: 'a tenth', beats: 4, line: 'DB C2, Vc E3, Va G3, Vn2 C4, Vn1 E4' },
+    { name: 'an octave', beats: 4, line: 'DB C2, Vc C3, Va G3, Vn2 E4, Vn1 C5' },
   ],
   shares: [
     { with: 'petra', may: 'comment' },
@@ -53,9 +53,9 @@ const LOW_THIRD: DemoStudy = {
     {
       by: 'isolde',
       chord: 1,
-      text: 'Same four notes. Only the cellos moved, and the third went to the violas.',
+      text: 'Nothing stands under the printed limit any more, and six basses on C2 still thicken it. Play both and decide whom you believe.',
     },
-    { by: 'petra', chord: 3, text: 'Is the tenth too empty in the middle for a final chord?' },
+    { by: 'petra', chord: 3, text: 'Is the octave too empty in the middle for a final chord?' },
   ],
 };
 
@@ -155,7 +155,7 @@ const ON_PURPOSE: DemoStudy = {
   key: { tonic: 'C', mode: 'minor' },
   tempoBpm: 40,
   chords: [
-    { name: 'afloat', beats: 4, dynamic: 'p', muted: true, line: 'DB C2, Vc G2, Va Eb3, Vn2 C4, Vn1 G4' },
+    { name: 'afloat', beats: 4, dynamic: 'p', muted: true, line: 'DB C2, Vc C3, Va G3, Vn2 C4, Vn1 Eb4' },
     { name: 'shoaling', beats: 4, dynamic: 'p', muted: true, line: 'DB C2, Vc Ab2, Va C3, Vn2 F3' },
     {
       name: 'aground',
