@@ -21,8 +21,8 @@ export default defineConfig({
   workers: 1,
   retries: 0,
   forbidOnly: true,
-  timeout: 60_000,
-  expect: { timeout: 10_000 },
+  timeout: 90_000,
+  expect: { timeout: 20_000 },
   reporter: result ? [['list'], ['json', { outputFile: result }]] : [['list']],
   use: {
     ...devices['Desktop Chrome'],
