@@ -20,6 +20,8 @@ export interface Finding {
 export interface Headline {
   /** 0 … 100, whole; null without notes. */
   readonly index: number | null;
+  /** Half the width of the band in which the index may lie, whole. */
+  readonly uncertainty: number;
   /** Where it is reached and what stands under its limit. */
   readonly text: string;
 }
@@ -115,12 +117,12 @@ export function findingsOf(analysis: ChordAnalysis, naming: NoteNaming): readonl
  * @example headlineOf(analysis).text // 'cloudiest in the great octave; 2 pairs under their low limits'
  */
 export function headlineOf({ voices, muddiness, limits }: ChordAnalysis): Headline {
-  if (voices.length === 0) return { index: null, text: 'no notes yet' };
+  if (voices.length === 0) return { index: null, uncertainty: 0, text: 'no notes yet' };
   const index = Math.round(muddiness.index);
   const pairs =
     limits.length === 1 ? '1 pair under its low limit' : `${limits.length} pairs under their low limits`;
   const under = limits.length === 0 ? 'no pair under its low limit' : pairs;
   const place =
     muddiness.register && index > 0 ? `cloudiest in ${registerName(muddiness.register)}` : 'nothing clouds';
-  return { index, text: `${place}; ${under}` };
+  return { index, uncertainty: Math.round(muddiness.uncertainty), text: `${place}; ${under}` };
 }

@@ -38,6 +38,7 @@ export function analysisOf(
     voices: soundsOf(chord),
     muddiness: {
       index: cloudiest.index,
+      uncertainty: 5,
       register: cloudiest.index > 0 ? cloudiest.register : null,
       registers,
     },

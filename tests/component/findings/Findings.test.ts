@@ -57,6 +57,7 @@ describe('the headline', () => {
     const analysis = analysisOf(chordOf('Vc A2'), { registers: { great: { index: 57.6, at: 40 } } });
     const text = mount(Headline, { props: { analysis } }).text();
     expect(text).toContain('58');
+    expect(text).toContain('give or take 5');
     expect(text).toContain('cloudiest in the great octave');
     expect(text).toContain('The index is a model');
   });

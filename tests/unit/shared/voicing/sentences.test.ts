@@ -100,13 +100,18 @@ describe('what is said of a chord', () => {
     });
     expect(headlineOf(analysis)).toEqual({
       index: 58,
+      uncertainty: 5,
       text: 'cloudiest in the great octave; 1 pair under its low limit',
     });
     expect(changeText(analysis)).toContain('Muddiness 58, cloudiest in the great octave');
   });
 
   it('when there are no notes, then there is no figure', () => {
-    expect(headlineOf(analysisOf(chordOf('')))).toEqual({ index: null, text: 'no notes yet' });
+    expect(headlineOf(analysisOf(chordOf('')))).toEqual({
+      index: null,
+      uncertainty: 0,
+      text: 'no notes yet',
+    });
     expect(changeText(analysisOf(chordOf('')))).toBe('The chord has no notes.');
     expect(overtonesSummary(analysisOf(chordOf('')))).toContain('no notes');
   });
