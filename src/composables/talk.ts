@@ -1,5 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/vue-query';
-import { computed, toValue, type MaybeRefOrGetter } from 'vue';
+import { computed, toValue, watch, type MaybeRefOrGetter } from 'vue';
 import type { Anchor, Annotation } from '#shared/contracts/annotations';
 import { ApiError } from '@/api/api-error';
 import { createAnnotation, deleteAnnotation, listAnnotations } from '@/api/annotations';
@@ -18,10 +18,14 @@ export function useTalk(studyId: MaybeRefOrGetter<string | null>, isOpen: MaybeR
     queryKey,
     queryFn: () => listAnnotations(id.value),
     enabled: () => id.value !== '',
-    refetchInterval: () => (toValue(isOpen) ? OPEN_MS : CLOSED_MS),
+    refetchInterval: computed(() => (toValue(isOpen) ? OPEN_MS : CLOSED_MS)),
     select: (answer) => answer.annotations,
   });
   const refresh = () => client.invalidateQueries({ queryKey: queryKey.value });
+  watch(
+    () => toValue(isOpen),
+    (opened) => opened && void refresh(),
+  );
   const taking = useMutation({
     mutationFn: (annotation: Annotation) => deleteAnnotation(id.value, annotation.id),
     onSettled: refresh,

@@ -23,11 +23,16 @@ export function saveFailureOf(error: unknown): SaveFailure {
   if (error.isPassing) {
     return { kind: 'passing', message: `${error.message} ${KEPT} and saved as soon as that is possible.` };
   }
+  if (error.status === UNAUTHORISED) {
+    return {
+      kind: 'refused',
+      message: `Your session has ended. ${KEPT}: sign in again, and they are saved.`,
+    };
+  }
   return { kind: 'refused', message: `${error.message} ${nextStep(error)}` };
 }
 
 function nextStep(error: ApiError): string {
-  if (error.status === UNAUTHORISED) return `${KEPT}: sign in again, and they are saved.`;
   if (error.status === NOT_FOUND || error.status === FORBIDDEN) {
     return `${KEPT}: you can keep them as a new study of your own.`;
   }

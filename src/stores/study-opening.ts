@@ -36,6 +36,8 @@ export async function open(desk: StudyDesk, studyId: string): Promise<void> {
   desk.status.value = 'loading';
   desk.problem.value = null;
   await settle(desk);
+  // Where the server was away when the page began, it is not known yet whose desk this is.
+  await desk.session.load();
   if (desk.wantedId.value !== studyId) return;
   layOut(desk, null);
   try {
