@@ -6,13 +6,8 @@ import {
   resetPassword,
   signUp,
 } from '#shared/contracts/accounts';
-import {
-  changePasswordByLink,
-  confirm,
-  mailConfirmation,
-  mailPasswordReset,
-  registerAccount,
-} from '#server/accounts/accounts.service';
+import { confirm, mailConfirmation, registerAccount } from '#server/accounts/accounts.service';
+import { changePasswordByLink, mailPasswordReset } from '#server/accounts/password-reset.service';
 import type { Deps } from '#server/deps';
 import { bind } from '#server/http/bind';
 import { addressOf } from '#server/limits/limits.service';

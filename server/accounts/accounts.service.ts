@@ -1,18 +1,17 @@
 import type { BodyOf } from '#shared/contracts/endpoint';
-import type { requestConfirmation, resetPassword, signUp } from '#shared/contracts/accounts';
+import type { requestConfirmation, signUp } from '#shared/contracts/accounts';
 import {
   findAccount,
   findAccountByEmail,
   insertAccount,
   markConfirmed,
   replaceUnconfirmed,
-  setPasswordHash,
   type NewAccount,
 } from '#server/accounts/accounts.repository';
 import { normaliseEmail } from '#server/accounts/email';
 import { passwordFault } from '#server/accounts/password-rules';
 import { randomSecret } from '#server/accounts/secrets';
-import { issueToken, peekToken, useToken } from '#server/accounts/tokens.repository';
+import { issueToken, useToken } from '#server/accounts/tokens.repository';
 import type { Transaction } from '#server/db/connection';
 import { insertOnce } from '#server/db/insert-once';
 import { inTransaction } from '#server/db/transaction';
@@ -20,16 +19,15 @@ import type { Deps } from '#server/deps';
 import { invalidInput, RequestError } from '#server/http/request-error';
 import { LINK_PER_ADDRESS, MAIL_PER_MAILBOX, SIGN_UP_PER_ADDRESS } from '#server/limits/limits.rules';
 import { countTry } from '#server/limits/limits.service';
-import { addressKnownLetter, confirmationLetter, passwordResetLetter } from '#server/mail/letters';
+import { addressKnownLetter, confirmationLetter } from '#server/mail/letters';
 import { putInOutbox, type Recipient } from '#server/mail/outbox.repository';
-import { endSessionsOf } from '#server/sessions/session.store';
 
-function checkPassword(password: string, person: { name: string; email: string }): void {
+export function checkPassword(password: string, person: { name: string; email: string }): void {
   const fault = passwordFault(password, person);
   if (fault !== null) throw invalidInput([{ path: 'body.password', message: fault }]);
 }
 
-function linkSpent(): RequestError {
+export function linkSpent(): RequestError {
   return new RequestError(
     410,
     'link.spent',
@@ -105,40 +103,5 @@ export async function confirm({ db, clock }: Deps, secret: string): Promise<stri
     if (account === null) throw linkSpent();
     await markConfirmed(tx, account.id, clock());
     return account.email;
-  });
-}
-
-export async function mailPasswordReset(
-  deps: Deps,
-  body: BodyOf<typeof requestConfirmation>,
-  address: string,
-): Promise<void> {
-  const email = normaliseEmail(body.email);
-  const now = deps.clock();
-  await countTry(deps.db, LINK_PER_ADDRESS, address, now);
-  await countTry(deps.db, MAIL_PER_MAILBOX, email, now);
-  await inTransaction(deps.db, async (tx) => {
-    const account = await findAccountByEmail(tx, email);
-    if (account === null) return;
-    const secret = await issueToken(tx, account.id, 'password-reset', now);
-    await putInOutbox(tx, account, passwordResetLetter(deps.env.publicUrl, secret), now);
-  });
-  deps.mailer.kick();
-}
-
-/** Ends every session of the account. Whoever holds the link holds the mailbox, so the address counts as confirmed. */
-export async function changePasswordByLink(deps: Deps, body: BodyOf<typeof resetPassword>): Promise<void> {
-  const { db, clock, passwords } = deps;
-  const holder = await peekToken(db, body.token, 'password-reset', clock());
-  const person = holder === null ? null : await findAccount(db, holder);
-  if (person === null) throw linkSpent();
-  checkPassword(body.password, person);
-  const passwordHash = await passwords.hash(body.password);
-  await inTransaction(db, async (tx) => {
-    const accountId = await useToken(tx, body.token, 'password-reset', clock());
-    if (accountId === null) throw linkSpent();
-    await setPasswordHash(tx, accountId, passwordHash);
-    await markConfirmed(tx, accountId, clock());
-    await endSessionsOf(tx, accountId, clock());
   });
 }

@@ -4,7 +4,7 @@ import type { Db } from '#server/db/connection';
 import { pruneDemoMails } from '#server/demo/mails.repository';
 import { describeError } from '#server/http/describe-error';
 import { pruneLimits } from '#server/limits/limits.service';
-import { pruneSessions } from '#server/sessions/session.store';
+import { pruneSessions } from '#server/sessions/sessions.repository';
 
 interface PruningDeps {
   readonly db: Db;

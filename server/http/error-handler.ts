@@ -39,7 +39,7 @@ function expected(error: unknown): RequestError | null {
     return new RequestError(
       503,
       'database.away',
-      'The database is away just now. Nothing was changed; try again soon.',
+      'The database is away just now. Please try again in a moment.',
       {
         retryAfterS: DATABASE_RETRY_S,
       },

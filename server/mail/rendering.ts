@@ -26,9 +26,8 @@ export function renderSubject(letter: Letter): string {
 export function renderText({ paragraphs, link, reason }: Letter): string {
   const body = link === undefined ? [...paragraphs] : [...paragraphs, `${link.label}:\n${link.url}`];
   return [
-    ...body.map((paragraph) => paragraph.replace(/\p{Cc}/gu, (c) => (c === '\n' ? c : ' '))),
-    '-- ',
-    reason,
+    ...body.map((paragraph) => paragraph.replace(/[^\P{Cc}\n]/gu, ' ')),
+    `-- \n${oneLine(reason)}`,
   ].join('\n\n');
 }
 

@@ -2,7 +2,8 @@ import session, { type CookieOptions } from 'express-session';
 import type { Request, RequestHandler, Response } from 'express';
 import { findAccount } from '#server/accounts/accounts.repository';
 import type { Db } from '#server/db/connection';
-import { IDLE_MS, SessionStore } from '#server/sessions/session.store';
+import { IDLE_MS } from '#server/sessions/sessions.repository';
+import { SessionStore } from '#server/sessions/session.store';
 
 interface Where {
   readonly publicUrl: string;

@@ -1,5 +1,5 @@
-import { and, desc, eq, inArray, isNull, lt, ne, or, type SQL } from 'drizzle-orm';
-import { alias, unionAll } from 'drizzle-orm/mysql-core';
+import { and, eq, isNull, type SQL } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/mysql-core';
 import type { Study } from '#shared/contracts/studies';
 import type { Connection, Transaction } from '#server/db/connection';
 import { accounts } from '#server/db/schema/accounts';
@@ -15,7 +15,8 @@ export type StudyWithSaver = Study & { readonly savedByName: string };
 
 const saver = alias(accounts, 'saver');
 
-function studyQuery(db: Connection, viewer: Viewer, which: SQL | undefined, number?: number) {
+/** Studies as the viewer may see them, at their newest save or another. */
+export function studyQuery(db: Connection, viewer: Viewer, which: SQL | undefined, number?: number) {
   return db
     .select({
       id: studies.id,
@@ -44,7 +45,7 @@ function studyQuery(db: Connection, viewer: Viewer, which: SQL | undefined, numb
 
 type Row = Awaited<ReturnType<typeof studyQuery>>[number];
 
-function toStudy(viewer: Viewer, row: Row): StudyWithSaver {
+export function toStudy(viewer: Viewer, row: Row): StudyWithSaver {
   const relation = relationOf(viewer, row);
   if (relation === 'stranger') throw unknownStudy();
   const { id, number, ownerName, savedByName } = row;
@@ -62,63 +63,6 @@ export async function findStudy(
   const [row] = await studyQuery(db, viewer, eq(studies.id, studyId), number);
   if (row === undefined) throw unknownStudy();
   return toStudy(viewer, row);
-}
-
-/** Where a page of the list begins: behind this study. */
-export interface Position {
-  readonly savedAt: Date;
-  readonly id: string;
-}
-
-const POSITION = { id: studies.id, savedAt: studies.savedAt };
-const NEWEST_FIRST = [desc(studies.savedAt), desc(studies.id)] as const;
-
-function behind(after: Position | null): SQL | undefined {
-  if (after === null) return undefined;
-  const { savedAt, id } = after;
-  return or(lt(studies.savedAt, savedAt), and(eq(studies.savedAt, savedAt), lt(studies.id, id)));
-}
-
-/** Each half reads no more than a page by its own index; a condition with `or` would read all. */
-async function findPositions(db: Connection, viewer: Viewer, after: Position | null, limit: number) {
-  const own = db
-    .select(POSITION)
-    .from(studies)
-    .where(and(eq(studies.ownerId, viewer.id), isNull(studies.deletedAt), behind(after)))
-    .orderBy(...NEWEST_FIRST)
-    .limit(limit);
-  const received = db
-    .select(POSITION)
-    .from(shares)
-    .innerJoin(studies, eq(studies.id, shares.studyId))
-    .where(
-      and(
-        eq(shares.email, viewer.email),
-        ne(studies.ownerId, viewer.id),
-        isNull(studies.deletedAt),
-        behind(after),
-      ),
-    )
-    .orderBy(...NEWEST_FIRST)
-    .limit(limit);
-  return unionAll(own, received)
-    .orderBy(...NEWEST_FIRST)
-    .limit(limit);
-}
-
-/** @returns own and received studies, newest first, and whether there are more behind them. */
-export async function findStudies(
-  db: Connection,
-  viewer: Viewer,
-  after: Position | null,
-  limit: number,
-): Promise<{ studies: Study[]; more: boolean }> {
-  const positions = await findPositions(db, viewer, after, limit + 1);
-  const ids = positions.slice(0, limit).map(({ id }) => id);
-  if (ids.length === 0) return { studies: [], more: false };
-  const rows = await studyQuery(db, viewer, inArray(studies.id, ids));
-  const byId = new Map(rows.map((row) => [row.id, toStudy(viewer, row)]));
-  return { studies: ids.flatMap((id) => byId.get(id) ?? []), more: positions.length > limit };
 }
 
 export async function insertStudy(

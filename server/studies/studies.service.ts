@@ -9,15 +9,9 @@ import type { Viewer } from '#server/http/bind';
 import { invalidInput } from '#server/http/request-error';
 import { findAcceptedDocument, insertSave } from '#server/studies/saves.repository';
 import { checkSameRequest } from '#server/studies/saving.service';
+import { findStudies, type Position } from '#server/studies/studies.listing';
 import { accessTrash, unknownStudy } from '#server/studies/studies.access';
-import {
-  findStudies,
-  findStudy,
-  findStudyIdByKey,
-  insertStudy,
-  setDeleted,
-  type Position,
-} from '#server/studies/studies.repository';
+import { findStudy, findStudyIdByKey, insertStudy, setDeleted } from '#server/studies/studies.repository';
 
 interface NewStudy {
   readonly document: StudyDocument;
