@@ -9,6 +9,8 @@ export interface IndexBand {
 
 /** Two bands that share more than this part of the narrower one show no clear difference. */
 const CLEAR_OVERLAP = 0.5;
+/** Figures are shown as whole points: less than one is no difference, however sure. */
+const LEAST_DIFFERENCE = 1;
 
 /**
  * The band of an index. The fit misses the chart by so much, and the published variants spread by so much, that
@@ -34,12 +36,13 @@ export function uncertaintyOf(index: number): number {
 
 /**
  * Whether two indices differ clearly.
- * @returns false where their bands overlap by more than half of the narrower one
+ * @returns false where they are less than a point apart, or their bands overlap by more than half of the narrower
  */
 export function differClearly(a: number, b: number): boolean {
+  if (Math.abs(a - b) < LEAST_DIFFERENCE) return false;
   const one = bandOf(a);
   const other = bandOf(b);
   const overlap = Math.min(one.high, other.high) - Math.max(one.low, other.low);
   const narrower = Math.min(one.high - one.low, other.high - other.low);
-  return narrower === 0 ? a !== b : overlap <= CLEAR_OVERLAP * narrower;
+  return overlap <= CLEAR_OVERLAP * narrower;
 }
