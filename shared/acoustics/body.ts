@@ -35,9 +35,11 @@ export function bodyGain(instrument: Instrument, frequencyHz: Hertz): Decibels {
 }
 
 function modes({ airHz, woodHz, hillHz }: InstrumentBody, frequencyHz: Hertz): Decibels {
-  const bumps = [airHz, ...woodHz].map((mode) => MODE_GAIN_DB * bump(frequencyHz / mode, MODE_WIDTH_OCTAVES));
-  const hill = HILL_GAIN_DB * bump(frequencyHz / hillHz, HILL_WIDTH_OCTAVES);
-  return bumps.reduce((sum, gain) => sum + gain, hill);
+  const bumps =
+    bump(frequencyHz / airHz, MODE_WIDTH_OCTAVES) +
+    bump(frequencyHz / woodHz[0], MODE_WIDTH_OCTAVES) +
+    bump(frequencyHz / woodHz[1], MODE_WIDTH_OCTAVES);
+  return MODE_GAIN_DB * bumps + HILL_GAIN_DB * bump(frequencyHz / hillHz, HILL_WIDTH_OCTAVES);
 }
 
 function bump(ratio: number, widthOctaves: number): number {

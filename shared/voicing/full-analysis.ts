@@ -31,6 +31,6 @@ export function fullAnalysis(chord: Chord, settings: SoundSettings): FullAnalysi
     density: densityOfChord(analysis.voices, settings.a4Hz),
     balance: balanceOf(analysis.voices),
     character: characterOf(analysis.voices, settings.a4Hz),
-    moves: helpfulMoves(chord, settings),
+    moves: helpfulMoves(chord, settings, analysis),
   };
 }

@@ -1,29 +1,51 @@
 import type { Chord } from '#shared/study/study.document';
-import type { SoundSettings } from '#shared/voicing/analysis';
-import { modelFor } from '#shared/voicing/muddiness/models';
-import { indexOf } from '#shared/voicing/muddiness/scores';
+import type { ChordAnalysis, PairShare, SoundSettings } from '#shared/voicing/analysis';
+import { analyseChord } from '#shared/voicing/analysis';
 import { moveTrial } from '#shared/voicing/moves/move-trial';
 import type { HelpfulMove } from '#shared/voicing/moves/moves';
 import { possibleMoves } from '#shared/voicing/moves/possible-moves';
+import { modelFor } from '#shared/voicing/muddiness/models';
+import { indexOf } from '#shared/voicing/muddiness/scores';
 import { differClearly } from '#shared/voicing/uncertainty';
 
 /** As many as a reader weighs against each other. */
 const MOVES_SHOWN = 8;
+/**
+ * A voice with less than this share of the cloudiest place cannot clear it: without it ρ would fall by less than
+ * the uncertainty.
+ */
+const LEAST_SHARE = 0.05;
 
 /**
  * The single moves that clear a chord most, each with the index before and after it.
  * @param chord 0 to 40 voices
  * @param settings what the sound depends on besides
+ * @param analysis of this chord, where it is at hand
  * @returns the most helpful first, at most eight; none whose difference is not clear
  */
-export function helpfulMoves(chord: Chord, settings: SoundSettings): readonly HelpfulMove[] {
+export function helpfulMoves(
+  chord: Chord,
+  settings: SoundSettings,
+  analysis: Pick<ChordAnalysis, 'muddiness' | 'pairs'> = analyseChord(chord, settings),
+): readonly HelpfulMove[] {
+  const before = analysis.muddiness.index;
+  if (!differClearly(before, 0)) return [];
   const model = modelFor(settings.a4Hz);
-  const { threshold } = model.constants;
+  const shares = voiceShares(analysis.pairs);
   const trial = moveTrial(chord, settings, model);
-  const before = indexOf(trial.before, threshold);
   return possibleMoves(chord.voices, settings.ensemble.bass)
-    .map((move) => ({ ...move, before, after: indexOf(trial.after(move), threshold) }))
+    .filter(({ ids }) => ids.some((id) => (shares.get(id) ?? 0) >= LEAST_SHARE))
+    .map((move) => ({ ...move, before, after: indexOf(trial.after(move), model.constants.threshold) }))
     .filter(({ after }) => after < before && differClearly(after, before))
     .sort((a, b) => a.after - b.after)
     .slice(0, MOVES_SHOWN);
+}
+
+/** How much of the cloudiest place each voice has a part in. */
+function voiceShares(pairs: readonly PairShare[]): ReadonlyMap<string, number> {
+  const shares = new Map<string, number>();
+  for (const { lowerId, upperId, share } of pairs) {
+    for (const id of [lowerId, upperId]) shares.set(id, (shares.get(id) ?? 0) + share);
+  }
+  return shares;
 }

@@ -2,7 +2,8 @@ import type { Section } from '#shared/strings/sections';
 import type { Voice } from '#shared/study/study.document';
 
 /** What one can do to a voice: one move at a time. */
-export type MoveKind = 'octaveUp' | 'octaveDown' | 'chordTone' | 'section' | 'leaveOut';
+export const MOVE_KINDS = ['octaveUp', 'octaveDown', 'chordTone', 'section', 'leaveOut'] as const;
+export type MoveKind = (typeof MOVE_KINDS)[number];
 
 /** A single move of a voice, with the voices linked to it. */
 export interface Move {

@@ -31,9 +31,14 @@ export function powerOf(level: Decibels): number {
 export function muddinessVoice(voice: Joinable, a4Hz: Hertz): MuddinessVoice {
   return {
     key: voice.toneKey,
-    makeTone: () => toneOf(spectrumOf(voice), a4Hz, spectrumOf({ ...voice, dynamic: 'mf' })),
+    makeTone: () => toneOf(spectrumOf(voice), a4Hz, spectrumAtMf(voice)),
     energy: powerOf(voice.nominalDb),
   };
+}
+
+/** What a tone is scaled by; undefined where it is at mf itself. */
+function spectrumAtMf(voice: Joinable): readonly Partial[] | undefined {
+  return voice.dynamic === 'mf' ? undefined : spectrumOf({ ...voice, dynamic: 'mf' });
 }
 
 /**

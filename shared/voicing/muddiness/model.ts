@@ -3,6 +3,7 @@ import type { Hertz, Semitones } from '#shared/units';
 import type { PitchAxis } from '#shared/voicing/muddiness/axis';
 import { pitchAt, pitchAxis } from '#shared/voicing/muddiness/axis';
 import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
+import { poolingPower } from '#shared/voicing/muddiness/constants';
 import type { MuddinessSums } from '#shared/voicing/muddiness/sums';
 import { addEntry, clearSums, sumsOn } from '#shared/voicing/muddiness/sums';
 import type { MuddinessTables, ToneTable } from '#shared/voicing/muddiness/tables';
@@ -41,9 +42,6 @@ export interface MuddinessModel {
   readonly scratch: MuddinessSums;
 }
 
-/** A power of which the square root is far quicker. */
-const ONE_AND_A_HALF = 1.5;
-
 /**
  * Prepares the index.
  * @param constants fitted; see shared/data/muddiness-constants
@@ -52,7 +50,7 @@ const ONE_AND_A_HALF = 1.5;
  * @source ρ(x) = (Σ (W∗r)^m)^(1/m) / (W∗E + ε Ē) · h, h = 1 / (1 + (f/f_c)^q)
  */
 export function muddinessModel(constants: MuddinessConstants, a4Hz: Hertz, step: Semitones): MuddinessModel {
-  const { pooling, cornerHz, slope } = constants;
+  const { cornerHz, slope } = constants;
   const axis = pitchAxis(step);
   return {
     axis,
@@ -63,7 +61,7 @@ export function muddinessModel(constants: MuddinessConstants, a4Hz: Hertz, step:
       const frequency = equalTempered(pitchAt(axis, point), a4Hz);
       return 1 / (1 + (frequency / cornerHz) ** slope);
     }),
-    power: pooling === ONE_AND_A_HALF ? (x) => x * Math.sqrt(x) : (x) => x ** pooling,
+    power: poolingPower(constants),
     scratch: sumsOn(axis),
   };
 }

@@ -2,6 +2,7 @@ import type { Hertz, Semitones } from '#shared/units';
 import type { Deposit, PitchAxis, Profile, Window } from '#shared/voicing/muddiness/axis';
 import { AXIS_LOW, depositOn, windowOn } from '#shared/voicing/muddiness/axis';
 import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
+import { poolingPower } from '#shared/voicing/muddiness/constants';
 import { cloudingOf } from '#shared/voicing/muddiness/pairs';
 import type { Tone } from '#shared/voicing/muddiness/tones';
 
@@ -40,6 +41,7 @@ export function muddinessTables(
   const deposit = depositOn(axis);
   const window = windowOn(axis, constants.windowSemitones);
   const localWindow = windowOn(axis, constants.localWindowSemitones);
+  const power = poolingPower(constants);
   const tones = new Map<string, ToneTable>();
   const pairs = new Map<number, Profile>();
   const ofTone = (key: string, make: () => Tone): ToneTable => {
@@ -66,7 +68,7 @@ export function muddinessTables(
     const [first, second] = low === a.number ? [a, b] : [b, a];
     const profile = cloudingOf(first.tone, second.tone, constants, a4Hz, deposit, window);
     const { values } = profile;
-    for (let i = 0; i < values.length; i += 1) values[i] = (values[i] ?? 0) ** constants.pooling;
+    for (let i = 0; i < values.length; i += 1) values[i] = power(values[i] ?? 0);
     pairs.set(key, profile);
     return profile;
   };

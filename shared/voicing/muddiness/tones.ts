@@ -5,6 +5,8 @@ import type { Partial } from '#shared/voicing/analysis';
 import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
 
 const DB_PER_AMPLITUDE_DECADE = 20;
+/** The power that has a quick way of its own. */
+const SQUARE_ROOT = 0.5;
 
 /**
  * The shape of a voice's sound: its partials scaled so that the squares of their amplitudes add up to 1 at mf.
@@ -51,7 +53,7 @@ function amplitudeOf({ levelDb }: Partial): number {
 export function cloudingAt(y: number, { peakErb, sharpness, reachErb }: MuddinessConstants): number {
   if (y >= reachErb) return 0;
   const base = (y / peakErb) * Math.exp(1 - y / peakErb);
-  return sharpness === 1 ? base : base ** sharpness;
+  return sharpness === SQUARE_ROOT ? Math.sqrt(base) : base ** sharpness;
 }
 
 /** @returns the difference of two frequencies in equivalent rectangular bandwidths at their mean */
