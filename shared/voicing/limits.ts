@@ -1,8 +1,33 @@
 import type { LowIntervalLimit } from '#shared/data/low-interval-limits';
 import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
+import type { Semitones } from '#shared/units';
 import type { LimitFinding, VoiceSound } from '#shared/voicing/analysis';
 
 type Note = Pick<VoiceSound, 'id' | 'midi'>;
+
+/** Stands for the lower note of an interval whose root is played elsewhere. */
+export const ROOT_ELSEWHERE = 'root-elsewhere';
+const OCTAVE: Semitones = 12;
+
+/**
+ * The interval from a root that is played elsewhere, taken just below the chord, up to its lowest note.
+ * @param notes in any order
+ * @param root the root's pitch class, 0 for C
+ * @returns the finding, with {@link ROOT_ELSEWHERE} for its lower note; null where it passes no limit
+ * @source where the bass is played elsewhere, the interval from that root up to the lowest note is tested too
+ * @example rootFinding([E2, B2], 0) // M3 on C2: 10 semitones under B flat 2
+ */
+export function rootFinding(
+  notes: readonly Note[],
+  root: number,
+  limits: readonly LowIntervalLimit[] = LOW_INTERVAL_LIMITS,
+): LimitFinding | null {
+  const [lowest] = [...notes].sort((a, b) => a.midi - b.midi);
+  if (!lowest) return null;
+  const above = (((lowest.midi - root) % OCTAVE) + OCTAVE) % OCTAVE;
+  const [finding] = findingOf({ id: ROOT_ELSEWHERE, midi: lowest.midi - above }, lowest, limits);
+  return finding ?? null;
+}
 
 /**
  * The pairs of notes that stand under their low interval limit, neighbours or not.

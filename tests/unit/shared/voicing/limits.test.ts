@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
 import { SCORE_CHORDS } from '#shared/data/score-chords';
 import { midiOfName } from '#shared/pitch/names';
-import { limitFindings } from '#shared/voicing/limits';
+import { limitFindings, ROOT_ELSEWHERE, rootFinding } from '#shared/voicing/limits';
 import { analyseChord } from '#shared/voicing/analysis';
 import { modelLimits } from '#shared/voicing/model-limits';
 import type { PlayingSection } from '#shared/voicing/section-pairs';
@@ -63,6 +63,29 @@ describe('the chart of low interval limits', () => {
 
   it('when notes stand in unison, an octave, or wider than a tenth apart, then there is no limit', () => {
     expect(limitFindings(notes('C1', 'C1', 'C2', 'G3'))).toEqual([]);
+  });
+
+  it('when the root is played elsewhere, then it is tested just below the lowest note, and only where it is another', () => {
+    expect(rootFinding(notes('E2', 'B2'), 0)).toEqual({
+      lowerId: ROOT_ELSEWHERE,
+      upperId: 'note-0',
+      interval: 'M3',
+      limit: 'Bb2',
+      semitonesBelow: 10,
+    });
+    expect(rootFinding(notes('C2', 'G2'), 0)).toBeNull();
+    expect(rootFinding(notes('E3', 'B3'), 0)).toBeNull();
+    expect(rootFinding([], 0)).toBeNull();
+  });
+
+  it('when a study has limits of its own, then they are the ones that count', () => {
+    const own = [
+      { interval: 'P5', semitones: 7, lowest: 'C4', lowestMidi: 60, spread: { low: 60, high: 60 } },
+    ];
+    expect(limitFindings(notes('C3', 'G3'), own)).toMatchObject([
+      { interval: 'P5', limit: 'C4', semitonesBelow: 12 },
+    ]);
+    expect(limitFindings(notes('C2', 'E2'), own)).toEqual([]);
   });
 
   it('when the real chords are tested, then none is accused of a limit that it does not pass', () => {
