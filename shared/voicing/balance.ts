@@ -28,9 +28,9 @@ export interface ChordBalance {
   readonly tones: readonly ToneBalance[];
 }
 
-const COVERED = 0.5;
+export const COVERED = 0.5;
 /** Twice the loudness, by Stevens's rule of thumb a difference of 10 dB, is swollen; from memory. */
-const SWOLLEN: Decibels = 10;
+export const SWOLLEN: Decibels = 10;
 const THIN: Decibels = -10;
 const DB_PER_POWER_DECADE = 10;
 

@@ -39,7 +39,12 @@ export function createSiltlineRouter(): Router {
   const router = createRouter({
     history: createWebHistory(),
     routes,
-    scrollBehavior: (to, from, saved) => saved ?? (to.path === from.path ? false : { top: 0 }),
+    scrollBehavior: (to, from, saved) => {
+      if (saved) return saved;
+      const part = document.getElementById(to.hash.slice(1));
+      if (part) return { el: part };
+      return to.path === from.path ? false : { top: 0 };
+    },
   });
   router.beforeEach(admit);
   router.afterEach((to, from, failure) => {

@@ -21,6 +21,12 @@ export const routes: RouteRecordRaw[] = [
     meta: { title: 'Studies', for: 'account' },
   },
   {
+    path: '/reference',
+    name: 'reference',
+    component: () => import('@/pages/ReferencePage.vue'),
+    meta: { title: 'Reference' },
+  },
+  {
     path: '/mail',
     name: 'mail',
     component: () => import('@/pages/MailPage.vue'),
