@@ -29,7 +29,7 @@ export interface Headline {
 /** Pairs with less of the clouding than this are not worth a sentence: our own choice. */
 const LEAST_SHARE = 0.05;
 /** A register under this is clear, and nothing is said to cloud it: the first mark of the ramp. */
-const CLEAR_BELOW = 25;
+export const CLEAR_BELOW = 25;
 
 interface Pair {
   readonly lower: VoiceSound;

@@ -10,7 +10,9 @@ export type Listening =
   | { readonly kind: 'voice'; readonly id: string }
   | { readonly kind: 'pair'; readonly lowerId: string; readonly upperId: string }
   /** All voices, of each only the partials in one register. */
-  | { readonly kind: 'register'; readonly register: Register; readonly a4Hz: Hertz };
+  | { readonly kind: 'register'; readonly register: Register; readonly a4Hz: Hertz }
+  /** The chord as it would be after a move: not a part of it, but heard in its place. */
+  | { readonly kind: 'trial'; readonly key: string; readonly sounds: readonly VoiceSound[] };
 
 export const WHOLE_CHORD: Listening = { kind: 'chord' };
 
@@ -19,6 +21,7 @@ export function sameListening(a: Listening, b: Listening): boolean {
   if (a.kind === 'pair' && b.kind === 'pair') return a.lowerId === b.lowerId && a.upperId === b.upperId;
   if (a.kind === 'register' && b.kind === 'register') return a.register === b.register;
   if (a.kind === 'voice' && b.kind === 'voice') return a.id === b.id;
+  if (a.kind === 'trial' && b.kind === 'trial') return a.key === b.key;
   return a.kind === 'chord' && b.kind === 'chord';
 }
 
@@ -53,6 +56,8 @@ export function heardOf(sounds: readonly VoiceSound[], listening: Listening): re
       return sounds
         .map((sound) => onlyRegister(sound, listening.register, listening.a4Hz))
         .filter(({ partials }) => partials.length > 0);
+    case 'trial':
+      return listening.sounds;
   }
 }
 

@@ -10,7 +10,7 @@ interface Known {
 const known = new WeakMap<Chord, Known>();
 
 /** Only what the sound depends on, so that a new title does not judge everything anew. */
-function settingsKey({ a4Hz, intonation, ensemble, key }: SoundSettings): string {
+export function settingsKey({ a4Hz, intonation, ensemble, key }: SoundSettings): string {
   return JSON.stringify([a4Hz, intonation, ensemble, key.tonic]);
 }
 

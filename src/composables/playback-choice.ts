@@ -24,6 +24,9 @@ interface PlaybackChoice {
   loudest(): Decibels;
 }
 
+/** Whether whole sections sound, which may be left out. */
+const isWhole = ({ kind }: Listening): boolean => kind === 'chord' || kind === 'trial';
+
 const NOTHING: PlaybackMaterial = { sounds: [], progression: [], tempoBpm: 60 };
 
 /** What of the chord is heard, and by whom. */
@@ -32,8 +35,12 @@ export function usePlaybackChoice(): PlaybackChoice {
   const listening = shallowRef<Listening>(WHOLE_CHORD);
   const mix = shallowRef<Mix>(EVERYBODY);
   const heard = computed(() => heardOf(material.value.sounds, listening.value));
-  const sections = computed(() => (listening.value.kind === 'chord' ? heardSections(mix.value) : SECTIONS));
+  const sections = computed(() => (isWhole(listening.value) ? heardSections(mix.value) : SECTIONS));
   const loudest = () =>
-    loudestLevel([material.value.sounds, ...material.value.progression.map(({ sounds }) => sounds)]);
+    loudestLevel([
+      material.value.sounds,
+      heard.value,
+      ...material.value.progression.map(({ sounds }) => sounds),
+    ]);
   return { material, listening, mix, heard, sections, loudest };
 }

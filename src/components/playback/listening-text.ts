@@ -20,5 +20,7 @@ export function listeningText(listening: Listening, sounds: readonly VoiceSound[
       return `Only ${voiceText(listening.lowerId, sounds)} with ${voiceText(listening.upperId, sounds)}`;
     case 'register':
       return `Only what sounds in the ${listening.register} register`;
+    case 'trial':
+      return 'The chord as it would be after the move';
   }
 }

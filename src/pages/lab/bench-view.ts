@@ -1,10 +1,11 @@
-import { computed, ref, watch } from 'vue';
+import { computed, shallowRef, watch } from 'vue';
 import type { NoteNaming } from '#shared/pitch/display';
 import { comfortableReach } from '#shared/study/reach';
 import type { Chord } from '#shared/study/study.document';
 import { reachOf } from '#shared/voicing/reach.sentences';
 import { findingsOf } from '#shared/voicing/sentences';
 import { factsOf } from '#shared/voicing/voice.sentences';
+import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { analysisOf } from '@/composables/analysis';
 import { useProgressionAnalyses } from '@/composables/progression-analyses';
 import type { NotePair } from '@/components/findings/Findings.vue';
@@ -37,12 +38,23 @@ export function useBenchView(
   );
 
   /** The two notes that a finding points out. */
-  const shown = ref<NotePair | null>(null);
-  const markedIds = computed(() => (shown.value ? [shown.value.lowerId, shown.value.upperId] : []));
+  const shown = shallowRef<NotePair | null>(null);
+  /** The move whose voices are pointed out; one thing is shown at a time. */
+  const shownMove = shallowRef<WeighedMove | null>(null);
+  const markedIds = computed(() => {
+    if (shownMove.value) return shownMove.value.ids;
+    return shown.value ? [shown.value.lowerId, shown.value.upperId] : [];
+  });
+  function show(pair: NotePair | null, move: WeighedMove | null = null): void {
+    shown.value = pair;
+    shownMove.value = move;
+  }
   watch(
     () => bench.chordId,
-    () => (shown.value = null),
+    () => show(null),
   );
+  watch(chord, () => (shownMove.value = null));
 
-  return { analysis, analyses, findings, reach, outOfReach, voiceFacts, progression, shown, markedIds };
+  const pointing = { shown, shownMove, markedIds, show };
+  return { analysis, analyses, findings, reach, outOfReach, voiceFacts, progression, ...pointing };
 }
