@@ -1,21 +1,36 @@
 import compression from 'compression';
 import express, { Router, type Express } from 'express';
 import { accountRoutes } from '#server/accounts/accounts.routes';
+import { analysisRoutes } from '#server/analyses/analyses.routes';
 import { annotationRoutes } from '#server/annotations/annotations.routes';
 import { demoRoutes } from '#server/demo/demo.routes';
 import type { Deps } from '#server/deps';
+import { docsRoutes } from '#server/docs/docs.routes';
 import { healthRoutes } from '#server/health/health.routes';
 import { clientFiles } from '#server/http/client-files';
 import { errorHandler, unknownRoute } from '#server/http/error-handler';
 import { knownMethodsOnly, noStore, securityHeaders } from '#server/http/headers';
 import { httpsOnly } from '#server/http/https-only';
 import { requestLog } from '#server/http/request-log';
+import { measureRoutes } from '#server/measures/measures.routes';
+import { scriptCalls } from '#server/measures/script-calls';
 import { csrfProtection } from '#server/sessions/csrf';
 import { sessions, viewer } from '#server/sessions/session.middleware';
 import { sessionRoutes } from '#server/sessions/sessions.routes';
 import { clientFolder } from '#server/setup/product';
 import { shareRoutes } from '#server/shares/shares.routes';
 import { studyRoutes } from '#server/studies/studies.routes';
+
+/**
+ * For scripts and lessons: knows nobody, reads and sets no cookie. It asks for no CSRF token, since such a token
+ * guards what a signed-in person could be made to change, and nothing is changed or kept here.
+ */
+function scriptRouter(deps: Deps): Router {
+  const router = Router();
+  router.use(['/api/analysis', '/api/measures'], scriptCalls(deps));
+  router.use(analysisRoutes(deps), measureRoutes(deps), docsRoutes(deps));
+  return router;
+}
 
 /** What knows who is asking. */
 function sessionRouter(deps: Deps): Router {
@@ -42,6 +57,7 @@ export function createApp(deps: Deps, pages = clientFolder): Express {
   app.use(healthRoutes(deps));
   if (https) app.use(httpsOnly(env.publicUrl));
   app.use(compression());
+  app.use(scriptRouter(deps));
   app.use((req, res, next) => (/^\/api(\/|$)/i.test(req.path) ? api(req, res, next) : next()));
   if (pages !== undefined) app.use(clientFiles(pages));
   app.use(unknownRoute, errorHandler);

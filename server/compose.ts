@@ -9,6 +9,7 @@ import type { Env, Settings } from '#server/env';
 import { startFakeSmtp } from '#server/mail/fake-smtp';
 import { startMailSender } from '#server/mail/mail-sender';
 import { openTransport } from '#server/mail/transport';
+import { createMeasurements } from '#server/measures/measurements';
 import type { Closing } from '#server/setup/closing';
 import { openDatabase } from '#server/setup/database';
 import { migrateDatabase } from '#server/setup/migration';
@@ -30,11 +31,13 @@ export async function composeDeps(settings: Settings, log: Logger, closing: Clos
   const env: Env = { ...settings, smtpUrl, sessionSecret: database.sessionSecret };
   const passwords = createPasswords();
   closing.add(passwords.close);
+  const measurements = createMeasurements();
+  closing.add(measurements.close);
   const transport = openTransport(smtpUrl);
   const mailer = startMailSender({ db, log, clock, transport, mailFrom: env.mailFrom });
   closing.add(mailer.stop, MAIL_PATIENCE_MS);
   closing.add(startPruning({ db, log, clock }));
-  const deps: Deps = { env, db, pool, log, mailer, passwords, clock };
+  const deps: Deps = { env, db, pool, log, mailer, passwords, measurements, clock };
   if (env.mode === 'demo' && (await isEmpty(db))) await seedDemo(deps);
   return deps;
 }

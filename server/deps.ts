@@ -4,6 +4,7 @@ import type { Passwords } from '#server/accounts/passwords';
 import type { Db } from '#server/db/connection';
 import type { Env } from '#server/env';
 import type { MailSender } from '#server/mail/mail-sender';
+import type { Measurements } from '#server/measures/measurements';
 
 /** Everything that the program stands on, made once at the start and passed in. */
 export interface Deps {
@@ -14,4 +15,5 @@ export interface Deps {
   readonly clock: () => Date;
   readonly passwords: Passwords;
   readonly mailer: MailSender;
+  readonly measurements: Measurements;
 }

@@ -43,6 +43,8 @@ function perHour(name: string, free: number): LimitRule {
 export const SIGN_IN_PER_ADDRESS = perMinute('sign-in per address', 60);
 export const SIGN_UP_PER_ADDRESS = perMinute('sign-up per address', 60);
 export const LINK_PER_ADDRESS = perMinute('link per address', 60);
+/** What scripts and lessons ask to be computed: ten a second, a class of 30 each one every three seconds. */
+export const SCRIPT_CALLS_PER_ADDRESS = perMinute('script calls per address', 600);
 
 /** Mail that a stranger can cause to one mailbox. */
 export const MAIL_PER_MAILBOX = perHour('mail per mailbox', 5);

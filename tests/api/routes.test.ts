@@ -1,7 +1,11 @@
+import supertest from 'supertest';
 import { expect, test } from 'vitest';
 import * as accountEndpoints from '#shared/contracts/accounts';
+import * as analysisEndpoints from '#shared/contracts/analysis';
 import * as annotationEndpoints from '#shared/contracts/annotations';
 import * as demoEndpoints from '#shared/contracts/demo';
+import * as docsEndpoints from '#shared/contracts/docs';
+import * as measureEndpoints from '#shared/contracts/measures';
 import * as studyEndpoints from '#shared/contracts/studies';
 import { createTestApp, type TestApp } from '../support/app';
 import { enter, somebody, type Somebody } from '../support/people';
@@ -30,6 +34,14 @@ const OPEN: readonly Row[] = [
   ['POST', '/api/password-resets', { token: SECRET, password: 'six geese a-laying' }],
   ['GET', '/api/demo/people'],
   ['GET', '/api/demo/mails'],
+];
+
+/** For scripts and lessons: the same for everybody, and nothing is changed, so no CSRF token is asked for. */
+const FOR_SCRIPTS: readonly Row[] = [
+  ['POST', '/api/analysis', { voices: [{ section: 'cello', pitch: 'C2' }] }],
+  ['POST', '/api/measures/roughness', { model: 'sethares', midi: [60, 64, 67], harmonics: 11 }],
+  ['POST', '/api/measures/limits', { section: 'cello' }],
+  ['GET', '/api/openapi.json'],
 ];
 
 const CREATE: Row = ['POST', '/api/studies', { document: documentOf('New'), requestKey: KEY }];
@@ -124,14 +136,22 @@ function nameOf([method, path]: Row): string {
 }
 
 test('when a contract has a route, then it is in the lists above, and nothing else is', () => {
-  const modules = [accountEndpoints, annotationEndpoints, demoEndpoints, studyEndpoints];
+  const modules = [
+    accountEndpoints,
+    analysisEndpoints,
+    annotationEndpoints,
+    demoEndpoints,
+    docsEndpoints,
+    measureEndpoints,
+    studyEndpoints,
+  ];
   const contracts = modules
     .flatMap((module) => Object.values(module))
     .filter(
       (value): value is { method: string; path: string } => typeof value === 'object' && 'method' in value,
     )
     .map(({ method, path }) => `${method} ${path}`);
-  const listed = [...OPEN, ...GUARDED.map(([row]) => row)].map(nameOf);
+  const listed = [...OPEN, ...FOR_SCRIPTS, ...GUARDED.map(([row]) => row)].map(nameOf);
   expect(listed.sort()).toEqual(contracts.sort());
 });
 
@@ -145,6 +165,21 @@ test.each(GUARDED.map(([row, expected]) => [nameOf(row), row, expected] as const
       answers[person] = (await who[person].send(method, fill(path), body)).status;
     }
     expect(PEOPLE.map((person) => answers[person])).toEqual(expected);
+  },
+  60_000,
+);
+
+test.each(FOR_SCRIPTS.map((row) => [nameOf(row), row] as const))(
+  'when %s is called by each kind of person, then all are answered alike, without a token, and get no cookie',
+  async (_name, [method, path, body]) => {
+    const { at, who } = await setScene();
+    const first = await supertest(at.app)[method === 'GET' ? 'get' : 'post'](path).send(body);
+    expect([first.status, first.headers['set-cookie']]).toEqual([200, undefined]);
+    for (const person of PEOPLE) {
+      const answer = await who[person].sendRaw(method, path, {}, body);
+      expect([answer.status, answer.headers['set-cookie']]).toEqual([200, undefined]);
+      expect(answer.body).toEqual(first.body);
+    }
   },
   60_000,
 );

@@ -7,11 +7,13 @@ import { createApp } from '#server/app';
 import { outbox } from '#server/db/schema/outbox';
 import type { Deps } from '#server/deps';
 import { readSettings } from '#server/env';
+import { createMeasurements } from '#server/measures/measurements';
 import { db, emptyTables, pool } from './database';
 
 /** The lowest cost that bcrypt knows: the tests are about what is checked, not about how long it takes. */
 const QUICK_COST = 4;
 const passwords = createPasswords(QUICK_COST, 1);
+const measurements = createMeasurements();
 const SECRET = 'a secret for tests, long enough to be taken';
 
 export interface TestApp {
@@ -35,6 +37,7 @@ export async function createTestApp(settings: Readonly<Record<string, string>> =
     db,
     pool,
     passwords,
+    measurements,
     log: pino({ level: 'silent' }),
     clock: () => new Date(now),
     mailer: { kick: () => undefined, stop: () => Promise.resolve() },
