@@ -36,7 +36,9 @@ export function cloudingOf(
         continue;
       }
       const product = (a.amplitudes[i] ?? 0) * (b.amplitudes[j] ?? 0);
-      if (y < FUSION_REACH * fusionErb) fusion += product * Math.exp(-((y / fusionErb) ** 2));
+      if (y < FUSION_REACH * fusionErb) {
+        fusion += (a.shape[i] ?? 0) * (b.shape[j] ?? 0) * Math.exp(-((y / fusionErb) ** 2));
+      }
       deposit.add(midiOfFrequency((low + high) / 2, a4Hz), product * cloudingAt(y, constants));
     }
   }

@@ -18,6 +18,8 @@ export interface Tone {
   readonly fundamental: Midi;
   readonly frequencies: Float64Array;
   readonly amplitudes: Float64Array;
+  /** The amplitudes at mf: whether partials fuse is a matter of pitch, not of how loud one plays. */
+  readonly shape: Float64Array;
   /** Where the partials lie on the pitch axis. */
   readonly pitches: Float64Array;
 }
@@ -25,17 +27,18 @@ export interface Tone {
 /**
  * @param partials rising in frequency, at least one; their common level drops out
  * @param a4Hz places the tone on the pitch axis
- * @param atMf the same tone at mf, by which it is scaled
+ * @param atMf the same partials at mf, by which they are scaled
  */
 export function toneOf(partials: readonly Partial[], a4Hz: Hertz, atMf: readonly Partial[] = partials): Tone {
   const frequencies = Float64Array.from(partials, ({ frequencyHz }) => frequencyHz);
-  const amplitudes = Float64Array.from(partials, amplitudeOf);
-  const scale = 1 / Math.sqrt(atMf.reduce((sum, partial) => sum + amplitudeOf(partial) ** 2, 0));
+  const atMfAmplitudes = Float64Array.from(atMf, amplitudeOf);
+  const scale = 1 / Math.sqrt(atMfAmplitudes.reduce((sum, a) => sum + a * a, 0));
   return {
     partials,
     fundamental: midiOfFrequency(frequencies[0] ?? 0, a4Hz),
     frequencies,
-    amplitudes: amplitudes.map((a) => a * scale),
+    amplitudes: Float64Array.from(partials, (partial) => amplitudeOf(partial) * scale),
+    shape: atMfAmplitudes.map((a) => a * scale),
     pitches: frequencies.map((frequency) => midiOfFrequency(frequency, a4Hz)),
   };
 }
