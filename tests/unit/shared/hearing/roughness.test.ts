@@ -15,8 +15,13 @@ import { input, numberList, numberOf, publishedRows, toleranceOf } from '../../.
 /*
  * Left out of the published values, and why:
  *  - hk.jl12.fig2.1b, fig2.15c, fig3.4a: the stored voicing or number is a slip in the source;
- *  - hk78.table.*: printed from the authors' own look-up curve, so only their order and correlation are checked;
- *  - hk.g.y1.5.cutNone: the curve without its cut-off; checked, but no model here uses it.
+ *  - hk78.table.*: printed from the authors' own look-up curve, so only their order is checked;
+ *  - hk.g.y1.5.cutNone: the curve without its cut-off; checked, but no model here uses it;
+ *  - measures that this program does not compute: sonorousness and multiplicity (Parncutt & Strasburger 1994),
+ *    periodicity (Stolzenburg 2015), spectral distance and entropy (Milne; Harrison & Pearce 2018, 2019),
+ *    harmonic similarity (Gill & Purves 2009), interval-class indices (Huron 1994), dissonance of Kameoka &
+ *    Kuriyagawa 1969 and Malmberg 1918 (rank checks from memory), roughness in asper, A-weighting, sones, and
+ *    spectral dominance (Terhardt 1982).
  */
 function chordOf(row: PublishedRow): readonly PureTone[] {
   const rounding = input(row, 'partial_rounding', z.string()) === 'nearest semitone' ? 'semitone' : 'exact';

@@ -88,13 +88,12 @@ describe('loudness', () => {
     }
   });
 
-  it('when any chord is played one dynamic louder, then its index moves by less than a point', () => {
+  it('when any chord is played as soft and as loud as can be, then its index moves by less than a point', () => {
     fc.assert(
-      fc.property(chords, fc.integer({ min: 0, max: DYNAMICS.length - 2 }), (chord, step) => {
-        const [soft = 'mf', loud = 'mf'] = DYNAMICS.slice(step, step + 2);
-        const before = analyseChord(withDynamic(chord, soft), EVEN_SETTINGS).muddiness.index;
-        const after = analyseChord(withDynamic(chord, loud), EVEN_SETTINGS).muddiness.index;
-        expect(Math.abs(after - before)).toBeLessThan(1);
+      fc.property(chords, (chord) => {
+        const soft = analyseChord(withDynamic(chord, 'ppp'), EVEN_SETTINGS).muddiness.index;
+        const loud = analyseChord(withDynamic(chord, 'fff'), EVEN_SETTINGS).muddiness.index;
+        expect(Math.abs(loud - soft)).toBeLessThan(1);
       }),
       { numRuns: 60 },
     );
