@@ -1,10 +1,11 @@
-import { computed, onMounted, ref } from 'vue';
+import { onMounted, ref, shallowRef } from 'vue';
+
 import { useRouter } from 'vue-router';
+import type { DraftDocument } from '#shared/study/draft';
 import { onSessionEnded } from '@/api/call';
 import { forgetCsrfToken } from '@/api/csrf';
 import { notice } from '@/composables/notices';
-import { useBenchStore } from '@/stores/bench.store';
-import { forgetPerson } from '@/stores/leaving';
+import { forgetPerson, unsavedWork } from '@/stores/leaving';
 import { sessionChannel } from '@/stores/session-channel';
 import { useSessionStore } from '@/stores/session.store';
 import { useStudyStore } from '@/stores/study.store';
@@ -13,12 +14,11 @@ import { useStudyStore } from '@/stores/study.store';
 export function useSigningOut() {
   const session = useSessionStore();
   const study = useStudyStore();
-  const bench = useBenchStore();
   const router = useRouter();
   const channel = sessionChannel();
   const asking = ref(false);
   const leaving = ref(false);
-  const wouldLose = computed(() => study.hasUnsaved || (bench.holdsDraft && !bench.isEmpty));
+  const works = shallowRef<readonly DraftDocument[]>([]);
 
   async function leave(): Promise<void> {
     asking.value = false;
@@ -45,7 +45,8 @@ export function useSigningOut() {
 
   async function signOut(): Promise<void> {
     if (study.hasUnsaved) await study.save();
-    if (wouldLose.value) asking.value = true;
+    works.value = unsavedWork();
+    if (works.value.length > 0) asking.value = true;
     else await leave();
   }
 
@@ -62,5 +63,5 @@ export function useSigningOut() {
     });
   });
 
-  return { asking, leaving, signOut, leave };
+  return { asking, works, leaving, signOut, leave };
 }

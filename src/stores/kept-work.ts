@@ -57,6 +57,14 @@ export function studiesWithWork(storage: Storage | null, accountId: string): str
     .filter((studyId) => readWork(storage, studyId, accountId) !== null);
 }
 
+/** @returns what this browser keeps unsaved of this person, by study */
+export function allWork(storage: Storage | null, accountId: string): ReadonlyMap<string, KeptWork> {
+  const works = studiesWithWork(storage, accountId).map(
+    (studyId) => [studyId, readWork(storage, studyId, accountId)] as const,
+  );
+  return new Map(works.flatMap(([studyId, work]) => (work ? [[studyId, work]] : [])));
+}
+
 export function forgetAllWork(storage: Storage | null): void {
   for (const key of keys(storage)) storage?.removeItem(key);
 }

@@ -45,6 +45,9 @@ const copyKeys = new WeakMap<StaleDetails, string>();
 
 const OWN = ' (mine)';
 
-function ownTitle(title: string): string {
-  return title.slice(0, MAX_TITLE - OWN.length) + OWN;
+/** Cuts between characters: half of one could not be saved. */
+export function ownTitle(title: string): string {
+  const characters = Array.from(title);
+  while ((characters.join('') + OWN).length > MAX_TITLE) characters.pop();
+  return characters.join('') + OWN;
 }

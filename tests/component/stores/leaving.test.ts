@@ -4,7 +4,7 @@ import { forgetCsrfToken } from '@/api/csrf';
 import { queryClient } from '@/plugins/query';
 import { writeDraft } from '@/stores/draft-storage';
 import { writeWork } from '@/stores/kept-work';
-import { forgetPerson } from '@/stores/leaving';
+import { forgetPerson, unsavedWork } from '@/stores/leaving';
 import { useSessionStore } from '@/stores/session.store';
 import { rememberSignUp } from '@/stores/sign-up-memory';
 import { ADA, atTheDesk, documentOf, STUDY_ID, studyOf } from '../../support/open-study';
@@ -33,6 +33,18 @@ describe('leaving', () => {
     expect([session.account, study.study, bench.isEmpty]).toEqual([null, null, true]);
     expect(queryClient.getQueryData(['studies'])).toBeUndefined();
     expect(JSON.stringify({ ...localStorage })).not.toMatch(/river\.example|Ebb|D3|C3|A2/);
+  });
+
+  it('when work on other studies waits in this browser, then leaving names it, and nothing that is saved', async () => {
+    stubApi({ [`GET /api/studies/${STUDY_ID}`]: () => ({ body: studyOf(documentOf('C3')) }) });
+    const { study } = atTheDesk();
+    await study.open(STUDY_ID);
+    expect(unsavedWork()).toEqual([]);
+    const document = { ...documentOf('D3'), title: 'Left on the train' };
+    const work = { accountId: ADA.id, basedOn: 1, document, pending: null };
+    writeWork(localStorage, 'study-of-another-day-12', work);
+    writeWork(localStorage, 'study-of-somebody-else', { ...work, accountId: 'somebody-else-entirely' });
+    expect(unsavedWork().map(({ title }) => title)).toEqual(['Left on the train']);
   });
 
   it('when the server is away, then one leaves all the same, and the session ends when it is back', async () => {
