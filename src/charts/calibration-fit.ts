@@ -26,6 +26,7 @@ type Plain = Pick<ChartColours, 'ink' | 'quiet' | 'line' | 'surface'>;
 /** The notes printed are few, and with flats as the chart prints them. */
 const FLATS = { tonic: 'C', mode: 'major' } as const;
 const OCTAVE: Semitones = 12;
+const FIFTH: Semitones = 7;
 /** Room above and below the outermost figure. */
 const ROOM: Semitones = 2;
 const HALF = 0.5;
@@ -122,7 +123,7 @@ export function calibrationData(
       ),
       dataset(
         marksOf(lines, ({ chart }) => chart),
-        mark('Chart', 'line', 10, ink, ink),
+        mark('Chart', 'line', 8, ink, ink),
       ),
       {
         ...{ label: 'Published variants', data: spreadsOf(lines), showLine: true, spanGaps: false },
@@ -167,7 +168,7 @@ export function calibrationOptions(
       y: {
         ...{ ...shared, min, max, title: title('Lower note [pitch]') },
         afterBuildTicks: (axis) => {
-          axis.ticks = octavesBetween(min, max).map((value) => ({ value }));
+          axis.ticks = landmarksBetween(min, max).map((value) => ({ value }));
         },
         ticks: { color: quiet, autoSkip: false, callback: (value) => nearestNote(Number(value), naming) },
       },
@@ -187,9 +188,8 @@ export function calibrationOptions(
   };
 }
 
-/** Half octaves, C and F sharp, so that a plot of an octave and a half has four lines. */
-function octavesBetween(min: Midi, max: Midi): readonly Midi[] {
-  const step = OCTAVE / 2;
-  const first = Math.ceil(min / step);
-  return Array.from({ length: Math.floor(max / step) - first + 1 }, (_, i) => (first + i) * step);
+/** Every C and G: notes that need no accidental, about half an octave apart. */
+function landmarksBetween(min: Midi, max: Midi): readonly Midi[] {
+  const keys = Array.from({ length: max - min + 1 }, (_, i) => min + i);
+  return keys.filter((midi) => midi % OCTAVE === 0 || midi % OCTAVE === FIFTH);
 }

@@ -11,6 +11,9 @@ export function figureText(value: number, decimals: number): string {
   return value.toFixed(decimals).replace('-', '−');
 }
 
+/** What the calibration says of its own fit. */
+type CalibrationFigures = Readonly<Record<keyof typeof CALIBRATION_FIT, number>>;
+
 /** One figure of how well the constants do, with what it means. */
 export interface FitFigure {
   readonly name: string;
@@ -19,7 +22,7 @@ export interface FitFigure {
 }
 
 /** @returns how well the constants in force do */
-export function fitFigures(fit: typeof CALIBRATION_FIT = CALIBRATION_FIT): readonly FitFigure[] {
+export function fitFigures(fit: CalibrationFigures = CALIBRATION_FIT): readonly FitFigure[] {
   const semitones = (value: number) => `${figureText(value, 2)} semitones rms`;
   const rated = REGISTER_RATINGS.filter(({ register }) => register <= MUDDY_REGISTERS).length;
   const [low, high] = correlationInterval(fit.correlation, rated);

@@ -114,8 +114,10 @@ export function levelsTables(): readonly PrintedTable[] {
     },
     {
       caption: 'Dynamics against mf [dB]',
-      columns: figureColumns(...Object.keys(DYNAMIC_LEVELS)),
-      lines: [Object.values(DYNAMIC_LEVELS).map((level) => `${figureText(level, 0)}${FROM_MEMORY}`)],
+      columns: [{ label: 'Dynamic' }, ...figureColumns('Level')],
+      lines: Object.entries(DYNAMIC_LEVELS).map(([dynamic, level]) => [
+        ...[dynamic, `${figureText(level, 0)}${FROM_MEMORY}`],
+      ]),
     },
   ];
 }
@@ -126,7 +128,7 @@ export function registersTable(naming: NoteNaming): PrintedTable {
     caption: 'Registers',
     columns: columns('Register', 'From', 'To'),
     lines: REGISTER_BOUNDS.map(({ register, low, high }) => [
-      ...[register, nearestNote(low + HALF, naming), nearestNote(Math.ceil(high) - 1, naming)],
+      ...[register, nearestNote(low + HALF, naming), nearestNote(Math.floor(high), naming)],
     ]),
   };
 }

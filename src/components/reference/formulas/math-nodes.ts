@@ -6,7 +6,19 @@ type Node = VNode | readonly VNode[];
 const nodesOf = (node: Node): VNode[] => ('type' in node ? [node] : [...node]);
 const row = (...parts: readonly Node[]): VNode => h('mrow', parts.flatMap(nodesOf));
 const sign = (text: string, more: Readonly<Record<string, string>> = {}): VNode => h('mo', more, text);
-const between = (open: string, inner: Node, close: string): VNode => row(sign(open), inner, sign(close));
+
+/** Brackets grow with what is tall within them and with nothing else. */
+function between(open: string, inner: Node, close: string, tall: boolean): VNode {
+  const more = { stretchy: String(tall) };
+  return row(sign(open, more), inner, sign(close, more));
+}
+
+function isTall(part: Expression): boolean {
+  if (part.kind === 'quotient' || part.kind === 'over') return true;
+  if ('parts' in part) return part.parts.some(isTall);
+  if (part.kind === 'call') return part.of.some(isTall);
+  return 'of' in part && isTall(part.of);
+}
 
 /** Signs that a reader would otherwise need to bind by hand. */
 const LOOSE: readonly Expression['kind'][] = ['sum', 'negative', 'over'];
@@ -19,7 +31,7 @@ function numberText(value: number): string {
 
 function enclosed(part: Expression, kinds: readonly Expression['kind'][]): VNode {
   const node = mathNode(part);
-  return kinds.includes(part.kind) ? between('(', node, ')') : node;
+  return kinds.includes(part.kind) ? between('(', node, ')', isTall(part)) : node;
 }
 
 function sumNode(parts: readonly Expression[]): VNode {
@@ -66,9 +78,12 @@ export function mathNode(expression: Expression): VNode {
     case 'root':
       return h('msqrt', [mathNode(expression.of)]);
     case 'size':
-      return between('|', mathNode(expression.of), '|');
+      return between('|', mathNode(expression.of), '|', isTall(expression.of));
     case 'call':
-      return row(h('mi', expression.name), between('(', row(...separated(expression.of.map(mathNode))), ')'));
+      return row(
+        h('mi', expression.name),
+        between('(', row(...separated(expression.of.map(mathNode))), ')', isTall(expression)),
+      );
     case 'over':
       return row(
         h('munder', [sign('∑'), h('mtext', expression.pairs)]),
