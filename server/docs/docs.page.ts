@@ -7,31 +7,34 @@ import { SCRIPT_CALLS_PER_ADDRESS } from '#server/limits/limits.rules';
 
 type Documented = (typeof DOCUMENTED)[number];
 
-function fieldRow({ path, kind, optional, about }: Field, request: boolean): Html {
-  const may = request && optional ? ' (may be left out)' : '';
-  return html`<tr>
-    <td><code>${path}</code></td>
-    <td>${kind}${may}</td>
-    <td>${about}</td>
-  </tr>`;
+function table(label: string, heads: readonly string[], rows: readonly (readonly string[])[]): Html {
+  const row = ([first = '', ...others]: readonly string[]) =>
+    html`<tr>
+      <td><code>${first}</code></td>
+      ${others.map((text) => html`<td>${text}</td>`)}
+    </tr>`;
+  return html`<div class="scroll" tabindex="0" role="region" aria-label="${label}">
+    <table>
+      <thead>
+        <tr>
+          ${heads.map((head) => html`<th scope="col">${head}</th>`)}
+        </tr>
+      </thead>
+      <tbody>
+        ${rows.map(row)}
+      </tbody>
+    </table>
+  </div>`;
 }
 
 function fieldTable(title: string, fields: readonly Field[], request: boolean): Html {
+  const rows = fields.map(({ path, kind, optional, about }) => [
+    path,
+    request && optional ? `${kind} (may be left out)` : kind,
+    about,
+  ]);
   return html`<h3>${title}</h3>
-    <div class="scroll" tabindex="0" role="region" aria-label="${title}">
-      <table>
-        <thead>
-          <tr>
-            <th scope="col">field</th>
-            <th scope="col">kind</th>
-            <th scope="col">meaning</th>
-          </tr>
-        </thead>
-        <tbody>
-          ${fields.map((field) => fieldRow(field, request))}
-        </tbody>
-      </table>
-    </div>`;
+    ${table(title, ['field', 'kind', 'meaning'], rows)}`;
 }
 
 function code(label: string, text: string): Html {
@@ -53,33 +56,11 @@ function routeSection({ name, endpoint, title, about }: Documented, examples: Ex
   </section>`;
 }
 
-function errorRows(): readonly Html[] {
-  return Object.entries(ERRORS).map(
-    ([status, about]) =>
-      html`<tr>
-        <td><code>${status}</code></td>
-        <td>${about}</td>
-      </tr>`,
-  );
-}
-
 function errorSection(): Html {
   return html`<section aria-labelledby="failures">
     <h2 id="failures">When it cannot answer</h2>
     <p>Every failure has one body: <code>{ "error": { "code", "message", "details"? } }</code>.</p>
-    <div class="scroll" tabindex="0" role="region" aria-label="Failures">
-      <table>
-        <thead>
-          <tr>
-            <th scope="col">status</th>
-            <th scope="col">meaning</th>
-          </tr>
-        </thead>
-        <tbody>
-          ${errorRows()}
-        </tbody>
-      </table>
-    </div>
+    ${table('Failures', ['status', 'meaning'], Object.entries(ERRORS))}
   </section>`;
 }
 

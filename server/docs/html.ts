@@ -1,10 +1,4 @@
-const ENTITIES: Readonly<Record<string, string>> = {
-  '&': '&amp;',
-  '<': '&lt;',
-  '>': '&gt;',
-  '"': '&quot;',
-  "'": '&#39;',
-};
+import { escapeHtml } from '#server/http/escape-html';
 
 /** Text made safe, or put together from safe parts: what `html` makes and takes as it is. */
 export class Html {
@@ -16,7 +10,7 @@ type Part = string | number | Html | readonly Html[];
 function safe(part: Part): string {
   if (part instanceof Html) return part.text;
   if (typeof part === 'object') return part.map(({ text }) => text).join('\n');
-  return String(part).replace(/[&<>"']/g, (sign) => ENTITIES[sign] ?? '');
+  return escapeHtml(String(part));
 }
 
 /** Puts HTML together; every text that is filled in is escaped. */

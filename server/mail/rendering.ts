@@ -1,16 +1,5 @@
+import { escapeHtml } from '#server/http/escape-html';
 import type { Letter } from '#server/mail/letters';
-
-const ENTITIES: Readonly<Record<string, string>> = {
-  '&': '&amp;',
-  '<': '&lt;',
-  '>': '&gt;',
-  '"': '&quot;',
-  "'": '&#39;',
-};
-
-function escapeHtml(text: string): string {
-  return text.replace(/[&<>"']/g, (character) => ENTITIES[character] ?? '');
-}
 
 /** Titles and names are people's text: line breaks and direction marks would reach headers or disguise what follows. */
 function oneLine(text: string): string {

@@ -62,12 +62,9 @@ export const measureLimits = defineEndpoint({
           interval: z.string(),
           semitones: z.number().int(),
           chart: z.string().nullable().meta({ description: 'null for the octave, which has no limit' }),
-          model: z
-            .string()
-            .nullable()
-            .meta({
-              description: 'the lowest placing at an index of 50 or under; null where none is over it',
-            }),
+          model: z.string().nullable().meta({
+            description: 'the lowest placing at an index of 50 or under; null where none is over it',
+          }),
         }),
       )
       .meta({ description: 'sixteen intervals, from the minor second to the major tenth' }),
