@@ -24,7 +24,7 @@ test('a reader finds the fit, its figures and a published value that can be chec
   // Harrison & Pearce 2020 test Hutchinson & Knopoff’s measure with 0.120 for 60 64 67 and 11 exact partials.
   await page.getByLabel('Notes', { exact: true }).fill('C4 E4 G4');
   await expect(page.locator('output')).toHaveText(/^0\.120/);
-  await page.getByLabel('Measure').selectOption('hutchinsonKnopoffRounded');
+  await page.getByLabel('Measure', { exact: true }).selectOption('hutchinsonKnopoffRounded');
   await expect(page.locator('output')).toHaveText(/^0\.0870/);
   await page.getByLabel('Notes', { exact: true }).fill('C4 Q4');
   await expect(page.getByText('“Q4” is neither a note')).toBeVisible();
