@@ -5,8 +5,17 @@ import type { Chord } from '#shared/study/study.document';
 import { reachOf } from '#shared/voicing/reach.sentences';
 import { findingsOf } from '#shared/voicing/sentences';
 import { factsOf } from '#shared/voicing/voice.sentences';
+import { explainRegister } from '#shared/voicing/analysis';
+import { balanceOf } from '#shared/voicing/balance';
+import { balanceSentences } from '#shared/voicing/balance.sentences';
+import { characterOf } from '#shared/voicing/character';
+import { characterFigures } from '#shared/voicing/character.sentences';
+import { registerFindings } from '#shared/voicing/register.sentences';
+import type { Register } from '#shared/voicing/registers';
+import { limitText } from '#shared/voicing/limits.sentences';
 import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { analysisOf } from '@/composables/analysis';
+import { useModelLimits } from '@/composables/model-limits';
 import { useProgressionAnalyses } from '@/composables/progression-analyses';
 import type { NotePair } from '@/components/findings/Findings.vue';
 import type { useBenchStore } from '@/stores/bench.store';
@@ -22,7 +31,20 @@ export function useBenchView(
     () => bench.study.chords,
     () => bench.study,
   );
-  const findings = computed(() => findingsOf(analysis.value, naming()));
+  /** The register that is asked about. */
+  const register = shallowRef<Register | null>(null);
+  const findings = computed(() => {
+    if (!register.value) return findingsOf(analysis.value, naming());
+    const pairs = explainRegister(chord(), bench.study, register.value);
+    return registerFindings(analysis.value, register.value, pairs, naming());
+  });
+  const character = computed(() => characterOf(analysis.value.voices, bench.study.a4Hz));
+  const figures = computed(() =>
+    characterFigures(character.value, analysis.value.limits.length, bench.study.key, naming()),
+  );
+  const balance = computed(() =>
+    balanceSentences(balanceOf(analysis.value.voices), analysis.value.voices, naming()),
+  );
   const reach = computed(() => comfortableReach(bench.study.ensemble.bass));
   const outOfReach = computed(() =>
     chord()
@@ -45,16 +67,37 @@ export function useBenchView(
     if (shownMove.value) return shownMove.value.ids;
     return shown.value ? [shown.value.lowerId, shown.value.upperId] : [];
   });
+  const modelLimit = useModelLimits(
+    () => analysis.value,
+    () => bench.study.a4Hz,
+    () => shown.value,
+  );
+  const shownLimit = computed(() =>
+    shown.value ? (modelLimit(shown.value.lowerId, shown.value.upperId) ?? null) : null,
+  );
+  /** @returns the limits of two notes in words; `null` until they are known */
+  function limitOf({ lowerId, upperId }: NotePair): string | null {
+    const limit = modelLimit(lowerId, upperId);
+    return limit === undefined ? null : limitText(limit ?? undefined, bench.study.key, naming());
+  }
   function show(pair: NotePair | null, move: WeighedMove | null = null): void {
     shown.value = pair;
     shownMove.value = move;
   }
   watch(
     () => bench.chordId,
-    () => show(null),
+    () => {
+      show(null);
+      register.value = null;
+    },
   );
   watch(chord, () => (shownMove.value = null));
 
-  const pointing = { shown, shownMove, markedIds, show };
+  function askRegister(asked: Register | null): void {
+    register.value = asked;
+  }
+
+  const told = { figures, balance, register, askRegister };
+  const pointing = { ...told, shownLimit, limitOf, shown, shownMove, markedIds, show };
   return { analysis, analyses, findings, reach, outOfReach, voiceFacts, progression, ...pointing };
 }

@@ -15,7 +15,16 @@ const finding = (number: number): Finding => ({
 function mountFindings(count: number, props: Partial<InstanceType<typeof Findings>['$props']> = {}) {
   const findings = Array.from({ length: count }, (_, index) => finding(index + 1));
   return mount(Findings, {
-    props: { findings, shown: null, heard: null, empty: false, ...props },
+    props: {
+      findings,
+      shown: null,
+      heard: null,
+      limitOf: () => null,
+      register: null,
+      registerHeard: false,
+      empty: false,
+      ...props,
+    },
     global: { plugins: [Quasar] },
   });
 }
