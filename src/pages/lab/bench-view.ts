@@ -3,21 +3,14 @@ import type { NoteNaming } from '#shared/pitch/display';
 import { comfortableReach } from '#shared/study/reach';
 import type { Chord } from '#shared/study/study.document';
 import { reachOf } from '#shared/voicing/reach.sentences';
-import { findingsOf } from '#shared/voicing/sentences';
 import { factsOf } from '#shared/voicing/voice.sentences';
-import { explainRegister } from '#shared/voicing/analysis';
-import { balanceOf } from '#shared/voicing/balance';
-import { balanceSentences } from '#shared/voicing/balance.sentences';
-import { characterOf } from '#shared/voicing/character';
-import { characterFigures } from '#shared/voicing/character.sentences';
-import { registerFindings } from '#shared/voicing/register.sentences';
-import type { Register } from '#shared/voicing/registers';
 import { limitText } from '#shared/voicing/limits.sentences';
 import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { analysisOf } from '@/composables/analysis';
 import { useModelLimits } from '@/composables/model-limits';
 import { useProgressionAnalyses } from '@/composables/progression-analyses';
 import type { NotePair } from '@/components/findings/Findings.vue';
+import { useChordTelling } from '@/pages/lab/chord-telling';
 import type { useBenchStore } from '@/stores/bench.store';
 
 /** What the bench shows of the chord that is selected. */
@@ -31,20 +24,7 @@ export function useBenchView(
     () => bench.study.chords,
     () => bench.study,
   );
-  /** The register that is asked about. */
-  const register = shallowRef<Register | null>(null);
-  const findings = computed(() => {
-    if (!register.value) return findingsOf(analysis.value, naming());
-    const pairs = explainRegister(chord(), bench.study, register.value);
-    return registerFindings(analysis.value, register.value, pairs, naming());
-  });
-  const character = computed(() => characterOf(analysis.value.voices, bench.study.a4Hz));
-  const figures = computed(() =>
-    characterFigures(character.value, analysis.value.limits.length, bench.study.key, naming()),
-  );
-  const balance = computed(() =>
-    balanceSentences(balanceOf(analysis.value.voices), analysis.value.voices, naming()),
-  );
+  const telling = useChordTelling(bench, chord, () => analysis.value, naming);
   const reach = computed(() => comfortableReach(bench.study.ensemble.bass));
   const outOfReach = computed(() =>
     chord()
@@ -88,16 +68,11 @@ export function useBenchView(
     () => bench.chordId,
     () => {
       show(null);
-      register.value = null;
+      telling.askRegister(null);
     },
   );
   watch(chord, () => (shownMove.value = null));
 
-  function askRegister(asked: Register | null): void {
-    register.value = asked;
-  }
-
-  const told = { figures, balance, register, askRegister };
-  const pointing = { ...told, shownLimit, limitOf, shown, shownMove, markedIds, show };
-  return { analysis, analyses, findings, reach, outOfReach, voiceFacts, progression, ...pointing };
+  const pointing = { ...telling, shownLimit, limitOf, shown, shownMove, markedIds, show };
+  return { analysis, analyses, reach, outOfReach, voiceFacts, progression, ...pointing };
 }
