@@ -1,9 +1,9 @@
 import { existsSync } from 'node:fs';
-import { drizzle } from 'drizzle-orm/mysql2';
-import { migrate } from 'drizzle-orm/mysql2/migrator';
+import { readMigrationFiles } from 'drizzle-orm/migrator';
 import { createConnection, type Connection, type RowDataPacket } from 'mysql2/promise';
 import { connectionOptions, type DatabaseAccess } from '#server/db/access';
 import { CannotStart } from '#server/setup/data-folder';
+import { applyMigrations } from '#server/setup/migration-steps';
 import { migrationsFolder } from '#server/setup/product';
 
 const LOCK_NAME = 'siltline.migration';
@@ -19,7 +19,7 @@ export async function migrateDatabase(access: DatabaseAccess): Promise<void> {
   const connection = await connect(access);
   try {
     await lockMigrations(connection);
-    await migrate(drizzle({ client: connection }), { migrationsFolder });
+    await applyMigrations(connection, readMigrationFiles({ migrationsFolder }));
   } finally {
     // Ends the session, and with it the lock.
     await connection.end();
