@@ -22,11 +22,15 @@ export interface AccountRecord extends Account {
   readonly confirmedAt: Date | null;
 }
 
+const RECORD = { ...PUBLIC, passwordHash: accounts.passwordHash, confirmedAt: accounts.confirmedAt };
+
 export async function findAccountByEmail(db: Connection, email: string): Promise<AccountRecord | null> {
-  const [row] = await db
-    .select({ ...PUBLIC, passwordHash: accounts.passwordHash, confirmedAt: accounts.confirmedAt })
-    .from(accounts)
-    .where(eq(accounts.email, email));
+  const [row] = await db.select(RECORD).from(accounts).where(eq(accounts.email, email));
+  return row ?? null;
+}
+
+export async function findAccountById(db: Connection, id: string): Promise<AccountRecord | null> {
+  const [row] = await db.select(RECORD).from(accounts).where(eq(accounts.id, id));
   return row ?? null;
 }
 

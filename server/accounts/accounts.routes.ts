@@ -6,11 +6,13 @@ import {
   resetPassword,
   signUp,
 } from '#shared/contracts/accounts';
-import { confirm, mailConfirmation, registerAccount } from '#server/accounts/accounts.service';
+import { mailConfirmation, registerAccount } from '#server/accounts/accounts.service';
+import { confirm } from '#server/accounts/confirmation.service';
 import { changePasswordByLink, mailPasswordReset } from '#server/accounts/password-reset.service';
 import type { Deps } from '#server/deps';
 import { bind } from '#server/http/bind';
 import { addressOf } from '#server/limits/limits.service';
+import { enterSession } from '#server/sessions/session.middleware';
 
 /** All of it is open to visitors, and answers alike whether or not an address is known. */
 export function accountRoutes(deps: Deps): Router {
@@ -26,7 +28,12 @@ export function accountRoutes(deps: Deps): Router {
     return {};
   });
 
-  bind(router, confirmAccount, async ({ body }) => ({ email: await confirm(deps, body.token) }));
+  bind(router, confirmAccount, async ({ req, body }) => {
+    const account = await confirm(deps, body, addressOf(req));
+    await enterSession(req, account.id);
+    req.log.info({ account: account.id }, 'confirmed and signed in');
+    return { account };
+  });
 
   bind(router, requestPasswordReset, async ({ req, body }) => {
     await mailPasswordReset(deps, body, addressOf(req));

@@ -1,17 +1,15 @@
 import type { BodyOf } from '#shared/contracts/endpoint';
 import type { requestConfirmation, signUp } from '#shared/contracts/accounts';
 import {
-  findAccount,
   findAccountByEmail,
   insertAccount,
-  markConfirmed,
   replaceUnconfirmed,
   type NewAccount,
 } from '#server/accounts/accounts.repository';
 import { normaliseEmail } from '#server/accounts/email';
 import { passwordFault } from '#server/accounts/password-rules';
 import { randomSecret } from '#server/accounts/secrets';
-import { issueToken, useToken } from '#server/accounts/tokens.repository';
+import { issueToken } from '#server/accounts/tokens.repository';
 import type { Transaction } from '#server/db/connection';
 import { insertOnce } from '#server/db/insert-once';
 import { inTransaction } from '#server/db/transaction';
@@ -93,15 +91,4 @@ export async function mailConfirmation(
     if (account !== null && account.confirmedAt === null) await sendConfirmation(deps, tx, account);
   });
   deps.mailer.kick();
-}
-
-/** @returns the address that is confirmed now. */
-export async function confirm({ db, clock }: Deps, secret: string): Promise<string> {
-  return inTransaction(db, async (tx) => {
-    const accountId = await useToken(tx, secret, 'confirmation', clock());
-    const account = accountId === null ? null : await findAccount(tx, accountId);
-    if (account === null) throw linkSpent();
-    await markConfirmed(tx, account.id, clock());
-    return account.email;
-  });
 }

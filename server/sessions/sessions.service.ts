@@ -37,13 +37,20 @@ async function renewHash(
   }
 }
 
-/** Checks who somebody says they are. Known and unknown addresses take the same way. */
-export async function authenticate(
-  deps: ServiceDeps,
-  credentials: { readonly email: string; readonly password: string },
+interface Credentials {
+  readonly email: string;
+  readonly password: string;
+}
+
+/**
+ * Checks a password, counted by the limits of signing in. Known and unknown addresses take the same way.
+ * @throws RequestError 401 when they do not belong together.
+ */
+export async function checkCredentials(
+  { db, clock, passwords }: ServiceDeps,
+  credentials: Credentials,
   address: string,
-): Promise<Account> {
-  const { db, clock, passwords } = deps;
+): Promise<AccountRecord> {
   const email = normaliseEmail(credentials.email);
   await countTry(db, SIGN_IN_PER_ADDRESS, address, clock());
   await countTry(db, SIGN_IN_PER_ACCOUNT, email, clock());
@@ -51,6 +58,16 @@ export async function authenticate(
   const fits = await passwords.matches(credentials.password, account?.passwordHash ?? null);
   if (account === null || !fits) throw refused();
   await forgetTries(db, SIGN_IN_PER_ACCOUNT, email);
+  return account;
+}
+
+/** Checks who somebody says they are, and that the address was confirmed. */
+export async function authenticate(
+  deps: ServiceDeps,
+  credentials: Credentials,
+  address: string,
+): Promise<Account> {
+  const account = await checkCredentials(deps, credentials, address);
   if (account.confirmedAt === null) throw unconfirmed();
   await renewHash(deps, account, credentials.password);
   return account;

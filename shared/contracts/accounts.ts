@@ -83,11 +83,12 @@ export const requestConfirmation = defineEndpoint({
   response: nothing,
 });
 
+/** Asks for the password too, since whoever reads the mail need not be who signed up; then it signs in at once. */
 export const confirmAccount = defineEndpoint({
   method: 'POST',
   path: '/api/confirmations',
-  body: z.strictObject({ token: tokenSchema }),
-  response: z.object({ email: z.string() }),
+  body: z.strictObject({ token: tokenSchema, password: z.string().min(1).max(MAX_PASSWORD) }),
+  response: z.object({ account: accountSchema }),
 });
 
 export const requestPasswordReset = defineEndpoint({

@@ -22,7 +22,12 @@ export const signUp = (body: BodyInputOf<typeof contract.signUp>) => call(contra
 
 export const requestConfirmation = (email: string) => call(contract.requestConfirmation, { body: { email } });
 
-export const confirmAccount = (token: string) => call(contract.confirmAccount, { body: { token } });
+/** Signs in too: see {@link signIn}. */
+export async function confirmAccount(body: BodyInputOf<typeof contract.confirmAccount>) {
+  const answer = await call(contract.confirmAccount, { body });
+  forgetCsrfToken();
+  return answer;
+}
 
 export const requestPasswordReset = (email: string) =>
   call(contract.requestPasswordReset, { body: { email } });

@@ -42,12 +42,20 @@ export const useSessionStore = defineStore('session', () => {
     return pending;
   }
 
-  async function signIn(email: string, password: string): Promise<Account> {
-    const answer = await api.signIn({ email, password });
+  function entered(who: Account): Account {
     storage?.removeItem(OWED_KEY);
-    account.value = answer.account;
+    account.value = who;
     status.value = 'ready';
-    return answer.account;
+    return who;
+  }
+
+  async function signIn(email: string, password: string): Promise<Account> {
+    return entered((await api.signIn({ email, password })).account);
+  }
+
+  /** Confirms the address by the link's secret, and signs in. */
+  async function confirm(token: string, password: string): Promise<Account> {
+    return entered((await api.confirmAccount({ token, password })).account);
   }
 
   async function endSession(): Promise<void> {
@@ -76,5 +84,5 @@ export const useSessionStore = defineStore('session', () => {
     return load();
   }
 
-  return { account, demo, status, role, load, reload, signIn, signOut, forget };
+  return { account, demo, status, role, load, reload, signIn, confirm, signOut, forget };
 });

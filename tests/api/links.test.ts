@@ -64,7 +64,9 @@ test('when a link is used by many at once, then one of them succeeds', async () 
   await askForConfirmation(at, email);
   const token = await lastSecret(at);
   const answers = await Promise.all(
-    Array.from({ length: 6 }, () => somebody(at).send('POST', '/api/confirmations', { token })),
+    Array.from({ length: 6 }, () =>
+      somebody(at).send('POST', '/api/confirmations', { token, password: PASSWORD }),
+    ),
   );
   const statuses = answers.map(({ status }) => status).sort();
   expect(statuses).toEqual([200, 410, 410, 410, 410, 410]);
@@ -92,7 +94,9 @@ test.each([
     await ask(at, email);
     const token = await lastSecret(at);
     const use = () =>
-      ask === askForReset ? reset(at, token) : somebody(at).send('POST', '/api/confirmations', { token });
+      ask === askForReset
+        ? reset(at, token)
+        : somebody(at).send('POST', '/api/confirmations', { token, password: PASSWORD });
     at.advance(life);
     expect((await use()).status).toBe(410);
     at.advance(-1);
@@ -122,7 +126,9 @@ test.each([[0], [false], [[]], [{}], ['0'], [null], [undefined]])(
     const at = await createTestApp();
     const { email } = await makeAccount(at, { confirmed: false });
     await askForConfirmation(at, email);
-    expect((await somebody(at).send('POST', '/api/confirmations', { token })).status).toBe(422);
+    expect(
+      (await somebody(at).send('POST', '/api/confirmations', { token, password: PASSWORD })).status,
+    ).toBe(422);
     expect(
       (await somebody(at).send('POST', '/api/password-resets', { token, password: PASSWORD })).status,
     ).toBe(422);
@@ -136,7 +142,9 @@ test('when a mail scanner opens the page of a link, then the link is still good'
   const token = await lastSecret(at);
   await somebody(at).send('GET', '/confirm');
   await somebody(at).send('GET', `/api/confirmations?token=${token}`);
-  expect((await somebody(at).send('POST', '/api/confirmations', { token })).status).toBe(200);
+  expect((await somebody(at).send('POST', '/api/confirmations', { token, password: PASSWORD })).status).toBe(
+    200,
+  );
 });
 
 test('when the database is read, then it holds no secret that opens anything', async () => {

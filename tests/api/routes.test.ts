@@ -29,7 +29,7 @@ const OPEN: readonly Row[] = [
     { email: 'a@x.example', name: 'A', password: 'six geese a-laying', role: 'composer' },
   ],
   ['POST', '/api/confirmation-requests', { email: 'a@x.example' }],
-  ['POST', '/api/confirmations', { token: SECRET }],
+  ['POST', '/api/confirmations', { token: SECRET, password: 'x' }],
   ['POST', '/api/password-reset-requests', { email: 'a@x.example' }],
   ['POST', '/api/password-resets', { token: SECRET, password: 'six geese a-laying' }],
   ['GET', '/api/demo/people'],

@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest';
 import { accounts } from '#server/db/schema/accounts';
 import { createTestApp, type TestApp } from '../support/app';
-import { makeAccount, PASSWORD, somebody } from '../support/people';
+import { makeAccount, PASSWORD, somebody, type Somebody } from '../support/people';
 
 const ADA = { email: 'ada@people.example', name: 'Ada', password: PASSWORD, role: 'student' };
 
@@ -13,7 +13,11 @@ function secretIn(text: string | undefined): string {
   return /#([\w-]{22})/.exec(text ?? '')?.[1] ?? 'no secret';
 }
 
-test('when somebody signs up and opens the link in the mail, then they can sign in', async () => {
+function confirm(who: Somebody, text: string | undefined, password = PASSWORD) {
+  return who.send('POST', '/api/confirmations', { token: secretIn(text), password });
+}
+
+test('when somebody signs up and confirms by the link and their password, then they are signed in', async () => {
   const at = await createTestApp();
   expect((await signUp(at)).status).toBe(200);
   expect((await somebody(at).signIn(ADA.email)).body.error.code).toBe('account.unconfirmed');
@@ -21,17 +25,36 @@ test('when somebody signs up and opens the link in the mail, then they can sign 
   const [mail] = await at.mails();
   expect(mail?.to).toBe('ada@people.example');
   expect(mail?.text).toContain('http://localhost:3000/confirm#');
-  const confirmed = await somebody(at).send('POST', '/api/confirmations', { token: secretIn(mail?.text) });
-  expect(confirmed.body).toEqual({ email: 'ada@people.example' });
+  const ada = somebody(at);
+  const confirmed = await confirm(ada, mail?.text);
+  const account = { id: expect.any(String), name: 'Ada', email: 'ada@people.example', role: 'student' };
+  expect(confirmed.body).toEqual({ account });
+  expect((await ada.send('GET', '/api/session')).body.account).toEqual(account);
+  expect((await somebody(at).signIn(ADA.email)).body).toEqual({ account });
+});
 
-  const answer = await somebody(at).signIn(ADA.email);
-  expect(answer.status).toBe(200);
-  expect(answer.body.account).toEqual({
-    id: expect.any(String),
-    name: 'Ada',
-    email: 'ada@people.example',
-    role: 'student',
-  });
+test('when a stranger signed up with somebody’s address, then its holder confirms nothing without that password', async () => {
+  const at = await createTestApp();
+  await signUp(at, { name: 'Mallory', password: 'planted before her' });
+  const [mail] = await at.mails();
+  const holder = somebody(at);
+  const refused = await confirm(holder, mail?.text, PASSWORD);
+  expect([refused.status, refused.body]).toEqual([401, (await somebody(at).signIn(ADA.email)).body]);
+  expect((await holder.send('GET', '/api/session')).body.account).toBeNull();
+  const mallory = await somebody(at).signIn(ADA.email, 'planted before her');
+  expect(mallory.body.error.code).toBe('account.unconfirmed');
+});
+
+test('when passwords are guessed at by a link, then the guesses are slowed as at signing in and the link stays good', async () => {
+  const at = await createTestApp();
+  await signUp(at);
+  const [mail] = await at.mails();
+  const statuses: number[] = [];
+  for (let guess = 0; guess < 6; guess += 1)
+    statuses.push((await confirm(somebody(at), mail?.text, `guess number ${guess}`)).status);
+  expect(statuses).toEqual([401, 401, 401, 401, 401, 429]);
+  at.advance(60 * 1000);
+  expect((await confirm(somebody(at), mail?.text)).status).toBe(200);
 });
 
 test('when the address has an account already, then the answer is the same and the mail says so', async () => {
@@ -61,9 +84,10 @@ test('when an unconfirmed address signs up again, then the newer sign-up and its
   await signUp(at);
   const [, second] = await at.mails();
 
-  const old = await somebody(at).send('POST', '/api/confirmations', { token: secretIn(first?.text) });
+  const old = await confirm(somebody(at), first?.text, 'planted before her');
   expect(old.body.error.code).toBe('link.spent');
-  await somebody(at).send('POST', '/api/confirmations', { token: secretIn(second?.text) });
+  expect((await confirm(somebody(at), second?.text, 'planted before her')).status).toBe(401);
+  expect((await confirm(somebody(at), second?.text)).status).toBe(200);
   expect((await somebody(at).signIn(ADA.email, 'planted before her')).status).toBe(401);
   expect((await somebody(at).signIn(ADA.email)).body.account.name).toBe('Ada');
 });
@@ -127,7 +151,7 @@ test('when two long passwords differ only behind the 72nd byte, then they are di
   const long = `${'éàü'.repeat(30)} tail`;
   await signUp(at, { password: long });
   const [mail] = await at.mails();
-  await somebody(at).send('POST', '/api/confirmations', { token: secretIn(mail?.text) });
+  await confirm(somebody(at), mail?.text, long);
   expect((await somebody(at).signIn(ADA.email, `${long}!`)).status).toBe(401);
   expect((await somebody(at).signIn(ADA.email, long)).status).toBe(200);
 });

@@ -1,4 +1,5 @@
 import { useRoute, useRouter } from 'vue-router';
+import type { Account } from '#shared/contracts/accounts';
 import { notice } from '@/composables/notices';
 import { nextPath } from '@/router/next';
 import { adoptDraft } from '@/stores/draft-adoption';
@@ -6,14 +7,13 @@ import { sessionChannel } from '@/stores/session-channel';
 import { useSessionStore } from '@/stores/session.store';
 import { useStudyStore } from '@/stores/study.store';
 
-/** Signs in and goes on: to the study that the draft became, to where one was sent from, or to the studies. */
+/** Signs in, by address or by the link that confirms it, and goes on: to the study that the draft became, to where one was sent from, or to the studies. */
 export function useEntering() {
   const session = useSessionStore();
   const router = useRouter();
   const route = useRoute();
 
-  async function enter(email: string, password: string): Promise<void> {
-    const account = await session.signIn(email, password);
+  async function goOn(account: Account): Promise<void> {
     useStudyStore().clearFor(account.id);
     sessionChannel().tell('signed-in');
     const adopted = await adoptDraft(account);
@@ -27,5 +27,8 @@ export function useEntering() {
     await router.push(nextPath(route.query.next, location.origin) ?? { name: 'lab' });
   }
 
-  return { enter };
+  const enter = async (email: string, password: string) => goOn(await session.signIn(email, password));
+  const confirm = async (token: string, password: string) => goOn(await session.confirm(token, password));
+
+  return { enter, confirm };
 }
