@@ -1,5 +1,5 @@
-import { displayPitch, type NoteNaming } from '#shared/pitch/display';
-import { midiOfName } from '#shared/pitch/names';
+import { displayPitch, noteName, type NoteNaming } from '#shared/pitch/display';
+import { midiOfName, parsePitch } from '#shared/pitch/names';
 import { SECTION_FACTS } from '#shared/strings/sections';
 import type { VoiceSound } from '#shared/voicing/analysis';
 import type { Move, MoveKind } from '#shared/voicing/moves/moves';
@@ -30,11 +30,13 @@ export function moveWords(move: WeighedMove, sounds: Sounds, naming: NoteNaming)
   const place = registerName(register).replace(/^the /, '');
   const giveOrTake = Math.round(move.uncertainty);
   const sure = giveOrTake > 0 ? `give or take ${giveOrTake}; ` : '';
+  const missing = move.lost === null ? null : parsePitch(move.lost);
+  const lost = missing ? `; then nobody plays ${noteName(missing, naming)}` : '';
   return {
     text: moveText(move, sounds, naming),
     before: Math.round(move.before),
     after: Math.round(move.after),
-    detail: `${sure}${place} ${Math.round(before)} → ${Math.round(after)}`,
+    detail: `${sure}${place} ${Math.round(before)} → ${Math.round(after)}${lost}`,
   };
 }
 

@@ -5,6 +5,7 @@ import { parsePitch } from '#shared/pitch/names';
 import type { ChordAnalysis, VoiceSound } from '#shared/voicing/analysis';
 import { spreadLabels } from '@/charts/spread-labels';
 import type { PitchAxis } from '@/charts/pitch-axis';
+import { semitonesText } from '#shared/voicing/words';
 
 /** A bracket from one note to another. */
 export interface SpacingBracket {
@@ -45,7 +46,7 @@ function words(lower: VoiceSound, upper: VoiceSound, under: number, { naming, br
   const notes = `${displayPitch(lower.pitch, naming)} to ${displayPitch(upper.pitch, naming)}`;
   return {
     label: [brief && below ? '' : short, below].filter((part) => part !== '').join(', '),
-    spoken: `${notes}: ${name}${under > 0 ? `, ${Math.round(under)} semitones under its low limit` : ''}`,
+    spoken: `${notes}: ${name}${under > 0 ? `, ${semitonesText(under)} under its low limit` : ''}`,
   };
 }
 

@@ -1,8 +1,8 @@
 const FIRST_MS = 2000;
-const LONGEST_MS = 60_000;
+const LONGEST_MS = 15_000;
 
 /**
- * How long to wait before asking again: doubled each time, a minute at most; common practice.
+ * How long to wait before asking again: doubled each time, a quarter of a minute at most; common practice.
  * @param failures in a row, from 1
  * @returns milliseconds
  * @example retryDelayMs(3) // 8000

@@ -104,7 +104,7 @@ export async function settle(desk: StudyDesk): Promise<void> {
   await until(desk.inFlight).toBe(false);
 }
 
-/** Saves after a pause of editing, when the connection is back, and when somebody has signed in again. */
+/** Saves after a pause of editing, when the connection is back or the reader is, and when somebody has signed in again. */
 export function useSavingByItself(desk: StudyDesk): void {
   const pause = useTimeoutFn(() => void flush(desk), PAUSE_MS, { immediate: false });
   const retry = useTimeoutFn(
@@ -130,5 +130,5 @@ export function useSavingByItself(desk: StudyDesk): void {
       if (id !== undefined && id === desk.accountId.value) void flush(desk);
     },
   );
-  useEventListener(globalThis, 'online', () => void flush(desk));
+  for (const sign of ['online', 'focus']) useEventListener(globalThis, sign, () => void flush(desk));
 }

@@ -2,7 +2,7 @@ import type { Chord } from '#shared/study/study.document';
 import type { ChordAnalysis, PairShare, SoundSettings } from '#shared/voicing/analysis';
 import { analyseChord } from '#shared/voicing/analysis';
 import { moveTrial } from '#shared/voicing/moves/move-trial';
-import type { HelpfulMove } from '#shared/voicing/moves/moves';
+import { lostBy, type HelpfulMove } from '#shared/voicing/moves/moves';
 import { possibleMoves } from '#shared/voicing/moves/possible-moves';
 import { modelFor } from '#shared/voicing/muddiness/models';
 import { indexOf } from '#shared/voicing/muddiness/scores';
@@ -21,7 +21,8 @@ const LEAST_SHARE = 0.05;
  * @param chord 0 to 40 voices
  * @param settings what the sound depends on besides
  * @param analysis of this chord, where it is at hand
- * @returns the most helpful first, at most eight; none whose difference is not clear
+ * @returns at most eight, none whose difference is not clear: first those that keep every chord tone, then those
+ *   that lose one, the most helpful first among each
  */
 export function helpfulMoves(
   chord: Chord,
@@ -37,7 +38,8 @@ export function helpfulMoves(
     .filter(({ ids }) => ids.some((id) => (shares.get(id) ?? 0) >= LEAST_SHARE))
     .map((move) => ({ ...move, before, after: indexOf(trial.after(move), model.constants.threshold) }))
     .filter(({ after }) => after < before && differClearly(after, before))
-    .sort((a, b) => a.after - b.after)
+    .map((move) => ({ ...move, lost: lostBy(chord.voices, move) }))
+    .sort((a, b) => Number(a.lost !== null) - Number(b.lost !== null) || a.after - b.after)
     .slice(0, MOVES_SHOWN);
 }
 

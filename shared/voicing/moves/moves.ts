@@ -1,3 +1,4 @@
+import { midiOfName } from '#shared/pitch/names';
 import type { Section } from '#shared/strings/sections';
 import type { Voice } from '#shared/study/study.document';
 
@@ -20,6 +21,23 @@ export interface Move {
 export interface HelpfulMove extends Move {
   readonly before: number;
   readonly after: number;
+  /** A pitch, as it stood, whose note of the scale nobody plays any more; null where every chord tone stays. */
+  readonly lost: string | null;
+}
+
+const OCTAVE = 12;
+
+function pitchClass(pitch: string): number {
+  return midiOfName(pitch) % OCTAVE;
+}
+
+/**
+ * @returns the first pitch whose note of the scale nobody plays after the move, or null
+ * @example lostBy(voices, move) // 'F2', where it was the only F
+ */
+export function lostBy(voices: readonly Voice[], move: Move): string | null {
+  const kept = new Set(movedVoices(voices, move).map(({ pitch }) => pitchClass(pitch)));
+  return voices.find(({ pitch }) => !kept.has(pitchClass(pitch)))?.pitch ?? null;
 }
 
 /** The voices of a chord after a move. */

@@ -14,7 +14,7 @@ const [bass = '', cello = '', viola = ''] = chord.voices.map(({ id }) => id);
 
 const moveOf = (id: string, after: number): WeighedMove => ({
   ...{ kind: 'leaveOut', ids: [id], pitches: [], section: 'cello' },
-  ...{ before: 90, after, uncertainty: 4 },
+  ...{ before: 90, after, uncertainty: 4, lost: null },
   register: { register: 'great', before: 90, after },
 });
 const moves = [

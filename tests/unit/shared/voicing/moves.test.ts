@@ -37,11 +37,24 @@ describe('moves that help', () => {
     const moves = helpfulMoves(voicing('D2 F2 A2 D3 A3'), EVEN_SETTINGS);
     expect(moves.length).toBeGreaterThan(0);
     expect(moves.length).toBeLessThanOrEqual(8);
-    moves.forEach(({ before, after }, i) => {
+    moves.forEach(({ before, after, lost }, i) => {
       expect(after).toBeLessThan(before);
       expect(differClearly(before, after)).toBe(true);
-      expect(after).toBeGreaterThanOrEqual(moves[i - 1]?.after ?? 0);
+      const last = moves[i - 1];
+      if (last?.lost === null) expect(lost !== null || after >= last.after).toBe(true);
+      else if (last) expect(lost !== null && after >= last.after).toBe(true);
     });
+  });
+
+  it('when a move takes away the only third, then it says which, and stands behind those that keep every tone', () => {
+    const moves = helpfulMoves(voicing('D2 F2 A2 D3 A3'), EVEN_SETTINGS);
+    expect(moves[0]?.lost).toBeNull();
+    for (const { ids, lost, pitches } of moves) {
+      if (lost === null) continue;
+      expect(ids).toHaveLength(1);
+      expect(lost).toBe('F2');
+      expect(pitches.some((pitch) => pitch.startsWith('F'))).toBe(false);
+    }
   });
 
   it('when any move of any chord is tried, then before and after are the indices of the chord before and after', () => {

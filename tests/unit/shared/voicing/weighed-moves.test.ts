@@ -62,12 +62,13 @@ describe('a move in words', () => {
 
   it('when it is weighed, then chord and register stand before and after, with how sure that is', () => {
     const weighed: WeighedMove = {
-      ...{ ...move, before: 92.9, after: 38.6, uncertainty: 4.8 },
+      ...{ ...move, before: 92.9, after: 38.6, uncertainty: 4.8, lost: null },
       register: { register: 'great', before: 92.9, after: 11.5 },
     };
     expect(moveWords(weighed, sounds, 'english')).toMatchObject({
       ...{ before: 93, after: 39 },
       detail: 'give or take 5; great octave 93 → 12',
     });
+    expect(moveWords({ ...weighed, lost: 'Bb2' }, sounds, 'german').detail).toMatch(/; then nobody plays B$/);
   });
 });
