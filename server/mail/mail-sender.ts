@@ -35,12 +35,15 @@ function pauseAfter(attempts: number): number {
   return Math.min(LONGEST_PAUSE_MS, FIRST_PAUSE_MS * 2 ** (attempts - 1));
 }
 
+/** What was refused is this mail, its sender, recipient or text; a refused sign-in (535) is for us to mend. */
+const MAIL_REFUSED: ReadonlySet<unknown> = new Set(['EENVELOPE', 'EMESSAGE']);
+
 /** The server's answer code (550, 451) or the connection's fault; never its text, which may quote the mail. */
 function faultOf(error: unknown): { name: string; final: boolean } {
   const read = (key: string): unknown => (error instanceof Error ? Reflect.get(error, key) : undefined);
-  const answer = read('responseCode');
-  if (typeof answer === 'number') return { name: String(answer), final: answer >= 500 && answer < 600 };
-  const code = read('code');
+  const [answer, code] = [read('responseCode'), read('code')];
+  if (typeof answer === 'number')
+    return { name: String(answer), final: answer >= 500 && answer < 600 && MAIL_REFUSED.has(code) };
   return { name: typeof code === 'string' ? code.slice(0, 40) : 'UNKNOWN', final: false };
 }
 

@@ -148,6 +148,33 @@ test('when the server refuses for now, then it is tried again under the same Mes
   expect(ids[1]).toBe(ids[0]);
 });
 
+test('when the server refuses the program itself, then the mail is kept and tried again', async () => {
+  const at = await createTestApp();
+  const url = await mailServer({
+    authOptional: false,
+    allowInsecureAuth: true,
+    disabledCommands: ['STARTTLS'],
+    onAuth: (_auth, _session, done) => done(Object.assign(new Error('no'), { responseCode: 535 })),
+  });
+  await post(at);
+  senderTo(at, url.replace('smtp://', 'smtp://user:outdated@')).kick();
+  await vi.waitUntil(async () => (await state(at))?.lastFault === '535');
+  expect(await state(at)).toMatchObject({ givenUpAt: null, attempts: 1 });
+  expect((await state(at))?.text).toContain('At six.');
+  expect((await state(at))?.dueAt).not.toBeNull();
+});
+
+test('when the server knows no such recipient, then the mail is given up', async () => {
+  const at = await createTestApp();
+  const url = await mailServer({
+    onRcptTo: (_address, _session, done) => done(Object.assign(new Error('no'), { responseCode: 550 })),
+  });
+  await post(at);
+  senderTo(at, url).kick();
+  await vi.waitUntil(async () => (await state(at))?.givenUpAt !== null);
+  expect(await state(at)).toMatchObject({ lastFault: '550', text: '', dueAt: null });
+});
+
 test('when two processes drain one outbox, then each mail goes out once', async () => {
   const at = await createTestApp();
   const received: string[] = [];
