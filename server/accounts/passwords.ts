@@ -27,7 +27,16 @@ export function createPasswords(cost = PASSWORD_COST, count = defaultWorkers()):
   const hash = async (password: string) => String(await workers.run({ kind: 'hash', password, cost }));
   let dummy: Promise<string> | undefined;
   // A hash that is no hash would be refused at once, and the quick answer would tell.
-  const dummyHash = () => (dummy ??= hash(randomSecret()));
+  const dummyHash = async () => {
+    dummy ??= hash(randomSecret());
+    try {
+      return await dummy;
+    } catch (error) {
+      // The workers were busy: the next who needs it has it made anew.
+      dummy = undefined;
+      throw error;
+    }
+  };
   return {
     hash,
     matches: async (password, known) => {

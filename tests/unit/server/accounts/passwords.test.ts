@@ -25,6 +25,15 @@ test('when there is no account, then the answer is no, whatever the password', a
   expect(await passwords.matches('anything', null)).toBe(false);
 });
 
+test('when the workers were too busy for an unknown account, then the next unknown account is answered', async () => {
+  const crowded = createPasswords(LOWEST_COST, 1);
+  const waiting = Promise.allSettled(Array.from({ length: 80 }, () => crowded.hash('x')));
+  await expect(crowded.matches('anything', null)).rejects.toMatchObject({ code: 'server.busy' });
+  await waiting;
+  expect(await crowded.matches('anything', null)).toBe(false);
+  await crowded.close();
+});
+
 test('when a hash was made at another cost, then it is outdated', async () => {
   expect(passwords.isOutdated(await passwords.hash('x'))).toBe(false);
   expect(passwords.isOutdated('$2b$10$abcdefghijklmnopqrstuuAJ5h1nTRZZFqMvQrnqpEWbpjPVJyTM2')).toBe(true);
