@@ -1,8 +1,7 @@
 import { z } from 'zod';
 import { defineEndpoint } from '#shared/contracts/endpoint';
-import { studyIdSchema } from '#shared/contracts/studies';
-
-const studyParams = z.object({ studyId: studyIdSchema });
+import { idSchema } from '#shared/contracts/ids';
+import { studyParams } from '#shared/contracts/studies';
 
 /** What an annotation hangs on. */
 export const anchorSchema = z.discriminatedUnion('kind', [
@@ -47,6 +46,6 @@ export const createAnnotation = defineEndpoint({
 export const deleteAnnotation = defineEndpoint({
   method: 'DELETE',
   path: '/api/studies/:studyId/annotations/:annotationId',
-  params: studyParams.extend({ annotationId: z.string().max(36) }),
+  params: studyParams.extend({ annotationId: idSchema }),
   response: z.object({}),
 });

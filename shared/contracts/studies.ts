@@ -1,11 +1,11 @@
 import { z } from 'zod';
 import { defineEndpoint } from '#shared/contracts/endpoint';
 import { emailSchema } from '#shared/contracts/accounts';
+import { idSchema } from '#shared/contracts/ids';
 import { RELATIONS } from '#shared/contracts/permissions';
 import { MAX_TITLE, studyDocumentSchema } from '#shared/study/study.document';
 
-export const studyIdSchema = z.string().regex(/^[A-Za-z0-9_-]{16,36}$/, 'this is not a study');
-const studyParams = z.object({ studyId: studyIdSchema });
+export const studyParams = z.object({ studyId: idSchema });
 /** Made by the client for each intended change: sent twice, it is done once. */
 const requestKeySchema = z.uuid();
 const nothing = z.object({});
@@ -126,6 +126,6 @@ export const createShare = defineEndpoint({
 export const deleteShare = defineEndpoint({
   method: 'DELETE',
   path: '/api/studies/:studyId/shares/:shareId',
-  params: studyParams.extend({ shareId: z.string().max(36) }),
+  params: studyParams.extend({ shareId: idSchema }),
   response: nothing,
 });

@@ -132,6 +132,18 @@ test.each([
   expect(answer.body.error.code).toBe(status === 404 ? 'route.unknown' : 'request.invalid');
 });
 
+test.each(['shares', 'annotations'])(
+  'when an id among the %s of a study is none that can be, then it names nothing',
+  async (noun) => {
+    const ada = await enter(await createTestApp());
+    const { id } = await makeStudy(ada);
+    for (const other of ['%C3%A9', '1', `${'A'.repeat(22)}%00`, 'A'.repeat(5000)]) {
+      const answer = await ada.send('DELETE', `/api/studies/${id}/${noun}/${other}`);
+      expect([answer.status, answer.body.error.code]).toEqual([404, 'route.unknown']);
+    }
+  },
+);
+
 test('when an address under /api names nothing, then the answer is 404 in the one shape', async () => {
   const at = await createTestApp();
   for (const path of ['/api', '/api/', '/api/nothing', '/API/nothing', '/api/studies/x/y/z']) {
