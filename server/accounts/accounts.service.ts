@@ -15,8 +15,8 @@ import { insertOnce } from '#server/db/insert-once';
 import { inTransaction } from '#server/db/transaction';
 import type { Deps } from '#server/deps';
 import { invalidInput, RequestError } from '#server/http/request-error';
-import { LINK_PER_ADDRESS, MAIL_PER_MAILBOX, SIGN_UP_PER_ADDRESS } from '#server/limits/limits.rules';
-import { countTry } from '#server/limits/limits.service';
+import { LINK_PER_ADDRESS, SIGN_UP_PER_ADDRESS } from '#server/limits/limits.rules';
+import { countMail, countTry } from '#server/limits/limits.service';
 import { addressKnownLetter, confirmationLetter } from '#server/mail/letters';
 import { putInOutbox, type Recipient } from '#server/mail/outbox.repository';
 
@@ -62,7 +62,7 @@ export async function registerAccount(
   const email = normaliseEmail(body.email);
   checkPassword(body.password, { name: body.name, email });
   await countTry(db, SIGN_UP_PER_ADDRESS, address, clock());
-  await countTry(db, MAIL_PER_MAILBOX, email, clock());
+  await countMail(db, email, address, clock());
   const passwordHash = await passwords.hash(body.password);
   const { name, role } = body;
   const account = {
@@ -85,7 +85,7 @@ export async function mailConfirmation(
 ): Promise<void> {
   const email = normaliseEmail(body.email);
   await countTry(deps.db, LINK_PER_ADDRESS, address, deps.clock());
-  await countTry(deps.db, MAIL_PER_MAILBOX, email, deps.clock());
+  await countMail(deps.db, email, address, deps.clock());
   await inTransaction(deps.db, async (tx) => {
     const account = await findAccountByEmail(tx, email);
     if (account !== null && account.confirmedAt === null) await sendConfirmation(deps, tx, account);

@@ -11,8 +11,8 @@ import { normaliseEmail } from '#server/accounts/email';
 import { issueToken, peekToken, useToken } from '#server/accounts/tokens.repository';
 import { inTransaction } from '#server/db/transaction';
 import type { Deps } from '#server/deps';
-import { LINK_PER_ADDRESS, MAIL_PER_MAILBOX } from '#server/limits/limits.rules';
-import { countTry } from '#server/limits/limits.service';
+import { LINK_PER_ADDRESS } from '#server/limits/limits.rules';
+import { countMail, countTry } from '#server/limits/limits.service';
 import { passwordResetLetter } from '#server/mail/letters';
 import { putInOutbox } from '#server/mail/outbox.repository';
 import { endSessionsOf } from '#server/sessions/sessions.repository';
@@ -25,7 +25,7 @@ export async function mailPasswordReset(
   const email = normaliseEmail(body.email);
   const now = deps.clock();
   await countTry(deps.db, LINK_PER_ADDRESS, address, now);
-  await countTry(deps.db, MAIL_PER_MAILBOX, email, now);
+  await countMail(deps.db, email, address, now);
   await inTransaction(deps.db, async (tx) => {
     const account = await findAccountByEmail(tx, email);
     if (account === null) return;

@@ -15,20 +15,31 @@ export interface LimitRule {
 }
 
 const SHORTEST_DELAY_MS = 2 * SECOND_MS;
-/** 60 guesses an hour at the most, and whoever owns the account never waits longer than this. */
+/** From one place 60 guesses an hour at the most. */
 const LONGEST_DELAY_MS = MINUTE_MS;
+/** From everywhere together; short, as strangers could otherwise keep the owner of an account waiting. */
+const LONGEST_SHARED_DELAY_MS = 8 * SECOND_MS;
 
-function growing(beyondFree: number): number {
-  return Math.min(LONGEST_DELAY_MS, SHORTEST_DELAY_MS * 2 ** (beyondFree - 1));
+function growingTo(longestMs: number): LimitRule['delayMs'] {
+  return (beyondFree) => Math.min(longestMs, SHORTEST_DELAY_MS * 2 ** (beyondFree - 1));
 }
 
-/** Guesses at one account's password: a delay that grows, never a lock that a stranger could turn. */
-export const SIGN_IN_PER_ACCOUNT: LimitRule = {
-  name: 'sign-in per account',
+/** Guesses at one account's password from one address: a delay that grows, and nobody else's. */
+export const SIGN_IN_FROM_ADDRESS: LimitRule = {
+  name: 'sign-in per account and address',
   free: 5,
   windowMs: HOUR_MS,
   sliding: true,
-  delayMs: growing,
+  delayMs: growingTo(LONGEST_DELAY_MS),
+};
+
+/** Guesses at one account's password from wherever: many addresses together are slowed too, though later. */
+export const SIGN_IN_PER_ACCOUNT: LimitRule = {
+  name: 'sign-in per account',
+  free: 30,
+  windowMs: HOUR_MS,
+  sliding: true,
+  delayMs: growingTo(LONGEST_SHARED_DELAY_MS),
 };
 
 function perMinute(name: string, free: number): LimitRule {
@@ -46,8 +57,10 @@ export const LINK_PER_ADDRESS = perMinute('link per address', 60);
 /** What scripts and lessons ask to be computed: ten a second, a class of 30 each one every three seconds. */
 export const SCRIPT_CALLS_PER_ADDRESS = perMinute('script calls per address', 600);
 
-/** Mail that a stranger can cause to one mailbox. */
-export const MAIL_PER_MAILBOX = perHour('mail per mailbox', 5);
+/** Mail to one mailbox that is asked for from one address: a stranger's requests do not use up the owner's. */
+export const MAIL_FROM_ADDRESS = perHour('mail per mailbox and address', 5);
+/** Mail to one mailbox that is asked for from wherever. */
+export const MAIL_PER_MAILBOX = perHour('mail per mailbox', 20);
 /** Mail about shared studies that one person causes, in all and to one mailbox. */
 export const SHARES_PER_PERSON = perHour('shares per person', 200);
 export const SHARES_PER_MAILBOX = perHour('shares per person and mailbox', 10);

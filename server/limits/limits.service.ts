@@ -6,7 +6,7 @@ import type { Db } from '#server/db/connection';
 import { limits } from '#server/db/schema/limits';
 import { inTransaction } from '#server/db/transaction';
 import { RequestError } from '#server/http/request-error';
-import type { LimitRule } from '#server/limits/limits.rules';
+import { MAIL_FROM_ADDRESS, MAIL_PER_MAILBOX, type LimitRule } from '#server/limits/limits.rules';
 
 /** A household or a school has a whole prefix of IPv6 addresses. */
 const IPV6_PREFIX = 56;
@@ -73,6 +73,29 @@ export async function countTry(db: Db, rule: LimitRule, subject: string, now: Da
     return 0;
   });
   if (waitMs > 0) throw tooMany(waitMs);
+}
+
+/** Counts a try at what two parties share: first by the one place it comes from, then from everywhere. */
+export async function countSharedTry(
+  db: Db,
+  rules: { readonly fromAddress: LimitRule; readonly inAll: LimitRule },
+  subject: string,
+  address: string,
+  now: Date,
+): Promise<void> {
+  // The tighter first: what it turns away does not count against the others.
+  await countTry(db, rules.fromAddress, placeOf(subject, address), now);
+  await countTry(db, rules.inAll, subject, now);
+}
+
+/** Counts a mail that anybody can ask for, known or not. */
+export function countMail(db: Db, email: string, address: string, now: Date): Promise<void> {
+  return countSharedTry(db, { fromAddress: MAIL_FROM_ADDRESS, inAll: MAIL_PER_MAILBOX }, email, address, now);
+}
+
+/** The subject of a rule about one party and the address that it comes from. */
+export function placeOf(subject: string, address: string): string {
+  return `${subject}\n${address}`;
 }
 
 /** The try was a good one: those before it count no more. */

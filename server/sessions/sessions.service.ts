@@ -7,8 +7,8 @@ import {
 import { normaliseEmail } from '#server/accounts/email';
 import type { Deps } from '#server/deps';
 import { RequestError } from '#server/http/request-error';
-import { SIGN_IN_PER_ACCOUNT, SIGN_IN_PER_ADDRESS } from '#server/limits/limits.rules';
-import { countTry, forgetTries } from '#server/limits/limits.service';
+import { SIGN_IN_FROM_ADDRESS, SIGN_IN_PER_ACCOUNT, SIGN_IN_PER_ADDRESS } from '#server/limits/limits.rules';
+import { countSharedTry, countTry, forgetTries, placeOf } from '#server/limits/limits.service';
 
 type ServiceDeps = Pick<Deps, 'db' | 'clock' | 'passwords'>;
 
@@ -53,10 +53,12 @@ export async function checkCredentials(
 ): Promise<AccountRecord> {
   const email = normaliseEmail(credentials.email);
   await countTry(db, SIGN_IN_PER_ADDRESS, address, clock());
-  await countTry(db, SIGN_IN_PER_ACCOUNT, email, clock());
+  const rules = { fromAddress: SIGN_IN_FROM_ADDRESS, inAll: SIGN_IN_PER_ACCOUNT };
+  await countSharedTry(db, rules, email, address, clock());
   const account = await findAccountByEmail(db, email);
   const fits = await passwords.matches(credentials.password, account?.passwordHash ?? null);
   if (account === null || !fits) throw refused();
+  await forgetTries(db, SIGN_IN_FROM_ADDRESS, placeOf(email, address));
   await forgetTries(db, SIGN_IN_PER_ACCOUNT, email);
   return account;
 }

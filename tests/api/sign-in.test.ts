@@ -163,6 +163,51 @@ test('when an unknown address is guessed at, then it is slowed just the same', a
   expect(await wrongGuesses(at, 'nobody@people.example', 7)).toEqual([401, 401, 401, 401, 401, 429, 429]);
 });
 
+/** Somebody elsewhere: the proxy in front says from where. */
+function elsewhere(at: TestApp, address: string) {
+  const person = somebody(at);
+  const send = async (path: string, body: object) => {
+    const { csrfToken } = (await person.send('GET', '/api/session/csrf-token')).body;
+    return person.sendRaw('POST', path, { 'x-csrf-token': csrfToken, 'x-forwarded-for': address }, body);
+  };
+  return {
+    guess: (email: string, password: string) => send('/api/session', { email, password }),
+    ask: (email: string) => send('/api/password-reset-requests', { email }),
+  };
+}
+
+test('when a stranger elsewhere guesses at an account, then its owner does not wait', async () => {
+  const at = await createTestApp({ TRUST_PROXY: '1' });
+  const { email } = await makeAccount(at);
+  const stranger = elsewhere(at, '198.51.100.7');
+  const statuses: number[] = [];
+  for (let n = 0; n < 7; n += 1) statuses.push((await stranger.guess(email, `guess ${n}`)).status);
+  expect(statuses).toEqual([401, 401, 401, 401, 401, 429, 429]);
+  expect((await elsewhere(at, '203.0.113.9').guess(email, PASSWORD)).status).toBe(200);
+});
+
+test('when many addresses guess at one account, then they are slowed together and the owner waits seconds', async () => {
+  const at = await createTestApp({ TRUST_PROXY: '1' });
+  const { email } = await makeAccount(at);
+  for (let n = 0; n < 30; n += 1)
+    expect((await elsewhere(at, `198.51.100.${n}`).guess(email, `guess ${n}`)).status).toBe(401);
+  const slowed = await elsewhere(at, '198.51.100.200').guess(email, 'one more');
+  expect(slowed.status).toBe(429);
+  expect(slowed.body.error.details.retryAfterS).toBeLessThanOrEqual(8);
+  at.advance(8 * SECOND_MS);
+  expect((await elsewhere(at, '203.0.113.9').guess(email, PASSWORD)).status).toBe(200);
+}, 60_000);
+
+test('when a stranger elsewhere has mail sent to a mailbox, then its owner still gets theirs; all together stop at 20', async () => {
+  const at = await createTestApp({ TRUST_PROXY: '1' });
+  const { email } = await makeAccount(at);
+  for (let n = 0; n < 6; n += 1) await elsewhere(at, '198.51.100.7').ask(email);
+  expect(await at.mails()).toHaveLength(5);
+  expect((await elsewhere(at, '203.0.113.9').ask(email)).status).toBe(200);
+  for (let n = 0; n < 20; n += 1) await elsewhere(at, `192.0.2.${n}`).ask(email);
+  expect(await at.mails()).toHaveLength(20);
+});
+
 test('when a class of 30 signs in within a minute from one address, then nobody waits', async () => {
   const at = await createTestApp();
   const people = await Promise.all(Array.from({ length: 30 }, () => makeAccount(at)));
