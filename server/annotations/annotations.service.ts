@@ -10,12 +10,13 @@ import {
   removeAnnotation,
   type AnnotationRow,
 } from '#server/annotations/annotations.repository';
-import { insertOnce } from '#server/db/insert-once';
+import type { Connection } from '#server/db/connection';
+import { inTransaction } from '#server/db/transaction';
 import type { Deps } from '#server/deps';
 import type { Viewer } from '#server/http/bind';
 import { invalidInput, notAllowed, RequestError } from '#server/http/request-error';
 import { checkSameRequest } from '#server/studies/saving.service';
-import { accessStudy } from '#server/studies/studies.access';
+import { accessStudy, lockStudy } from '#server/studies/studies.access';
 import { findStudy } from '#server/studies/studies.repository';
 
 export function unknownAnnotation(): RequestError {
@@ -43,7 +44,7 @@ export async function readAnnotations(
 
 /** @returns the chord that an annotation hangs on, which must stand in the newest save; null for the study. */
 async function anchoredChord(
-  { db }: Pick<Deps, 'db'>,
+  db: Connection,
   viewer: Viewer,
   studyId: string,
   anchor: Anchor,
@@ -56,23 +57,22 @@ async function anchoredChord(
 }
 
 export async function annotate(
-  deps: Pick<Deps, 'db' | 'clock'>,
+  { db, clock }: Pick<Deps, 'db' | 'clock'>,
   viewer: Viewer,
   studyId: string,
   body: BodyOf<typeof createAnnotation>,
 ): Promise<Annotation> {
-  const { db, clock } = deps;
-  await accessStudy(db, viewer, studyId, 'annotate');
   const { anchor, text, requestKey } = body;
   const key = { studyId, authorId: viewer.id, requestKey };
-  const earlier = await findAnnotationByKey(db, key);
-  if (earlier === null) {
-    const chordId = await anchoredChord(deps, viewer, studyId, anchor);
-    await insertOnce(() =>
-      insertAnnotation(db, { ...key, id: randomSecret(), chordId, text, writtenAt: clock() }),
-    );
-  }
-  const row = earlier ?? (await findAnnotationByKey(db, key));
+  const row = await inTransaction(db, async (tx) => {
+    // Nobody takes the right back, or the chord away, between the check and the writing.
+    await lockStudy(tx, viewer, studyId, 'annotate');
+    const earlier = await findAnnotationByKey(tx, key);
+    if (earlier !== null) return earlier;
+    const chordId = await anchoredChord(tx, viewer, studyId, anchor);
+    await insertAnnotation(tx, { ...key, id: randomSecret(), chordId, text, writtenAt: clock() });
+    return findAnnotationByKey(tx, key);
+  });
   if (row === null) throw unknownAnnotation();
   checkSameRequest({ anchor: anchorOf(row.chordId), text: row.text }, { anchor, text });
   return toAnnotation(viewer, row);
@@ -84,9 +84,11 @@ export async function takeAway(
   studyId: string,
   annotationId: string,
 ): Promise<void> {
-  const { relation } = await accessStudy(db, viewer, studyId, 'read');
-  const annotation = await findAnnotation(db, studyId, annotationId);
-  if (annotation === null) throw unknownAnnotation();
-  if (annotation.authorId !== viewer.id && !mayDoToStudy(relation, 'moderate')) throw notAllowed();
-  await removeAnnotation(db, annotationId);
+  await inTransaction(db, async (tx) => {
+    const { relation } = await lockStudy(tx, viewer, studyId, 'read');
+    const annotation = await findAnnotation(tx, studyId, annotationId);
+    if (annotation === null) throw unknownAnnotation();
+    if (annotation.authorId !== viewer.id && !mayDoToStudy(relation, 'moderate')) throw notAllowed();
+    await removeAnnotation(tx, annotationId);
+  });
 }

@@ -1,7 +1,9 @@
-import { and, asc, eq } from 'drizzle-orm';
+import { and, asc, eq, getTableColumns, isNull } from 'drizzle-orm';
 import type { Share } from '#shared/contracts/studies';
 import type { Connection } from '#server/db/connection';
 import { shares } from '#server/db/schema/shares';
+import { studies } from '#server/db/schema/studies';
+import type { Viewer } from '#server/http/bind';
 
 type Row = typeof shares.$inferSelect;
 
@@ -9,8 +11,14 @@ function toShare({ id, email, may, sharedAt }: Row): Share {
   return { id, email, may, sharedAt: sharedAt.toISOString() };
 }
 
-export async function findShares(db: Connection, studyId: string): Promise<Share[]> {
-  const rows = await db.select().from(shares).where(eq(shares.studyId, studyId)).orderBy(asc(shares.email));
+/** @returns the shares of a study of the viewer's own; of anybody else's, none. */
+export async function findShares(db: Connection, viewer: Viewer, studyId: string): Promise<Share[]> {
+  const rows = await db
+    .select(getTableColumns(shares))
+    .from(shares)
+    .innerJoin(studies, eq(studies.id, shares.studyId))
+    .where(and(eq(shares.studyId, studyId), eq(studies.ownerId, viewer.id), isNull(studies.deletedAt)))
+    .orderBy(asc(shares.email));
   return rows.map(toShare);
 }
 

@@ -11,7 +11,7 @@ export function shareRoutes(deps: Deps): Router {
 
   bindFor(router, 'studies.own', listShares, async ({ viewer, params }) => {
     await accessStudy(deps.db, viewer, params.studyId, 'share');
-    return { shares: await findShares(deps.db, params.studyId) };
+    return { shares: await findShares(deps.db, viewer, params.studyId) };
   });
 
   bindFor(router, 'studies.own', createShare, ({ viewer, params, body }) =>

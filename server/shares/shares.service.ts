@@ -12,7 +12,7 @@ import { countTry } from '#server/limits/limits.service';
 import { sharedStudyLetter } from '#server/mail/letters';
 import { putInOutbox } from '#server/mail/outbox.repository';
 import { changeShare, insertShare, removeShare } from '#server/shares/shares.repository';
-import { accessStudy } from '#server/studies/studies.access';
+import { accessStudy, lockStudy } from '#server/studies/studies.access';
 import { findStudy } from '#server/studies/studies.repository';
 
 type ShareDeps = Pick<Deps, 'db' | 'clock' | 'mailer' | 'env'>;
@@ -49,7 +49,7 @@ export async function share(
   await countTry(db, SHARES_PER_PERSON, viewer.id, clock());
   await countTry(db, SHARES_PER_MAILBOX, `${viewer.id} ${email}`, clock());
   const made = await inTransaction(db, async (tx) => {
-    await accessStudy(tx, viewer, studyId, 'share');
+    await lockStudy(tx, viewer, studyId, 'share');
     const row = { id: randomSecret(), studyId, email, may: body.may, sharedAt: clock() };
     if (await insertOnce(() => insertShare(tx, row))) await tell(deps, tx, viewer, studyId, row);
     return changeShare(tx, studyId, email, body.may);
@@ -65,6 +65,8 @@ export async function unshare(
   studyId: string,
   shareId: string,
 ): Promise<void> {
-  await accessStudy(db, viewer, studyId, 'share');
-  if (!(await removeShare(db, studyId, shareId))) throw unknownShare();
+  await inTransaction(db, async (tx) => {
+    await lockStudy(tx, viewer, studyId, 'share');
+    if (!(await removeShare(tx, studyId, shareId))) throw unknownShare();
+  });
 }

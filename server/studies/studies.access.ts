@@ -91,13 +91,13 @@ export async function lockStudy(
   return alive(permit(viewer, row, action));
 }
 
-/** Like {@link accessStudy}, for a study that may be in the trash. */
-export async function accessTrash(
-  db: Connection,
+/** Like {@link lockStudy}, for a study that may be in the trash. */
+export async function lockTrash(
+  tx: Transaction,
   viewer: Viewer,
   studyId: string,
   action: StudyAction,
 ): Promise<StudyAccess> {
-  const [row] = await accessQuery(db, viewer, studyId);
+  const [row] = await accessQuery(tx, viewer, studyId).for('update');
   return permit(viewer, row, action);
 }

@@ -10,7 +10,7 @@ import { invalidInput } from '#server/http/request-error';
 import { findAcceptedDocument, insertSave } from '#server/studies/saves.repository';
 import { checkSameRequest } from '#server/studies/saving.service';
 import { findStudies, type Position } from '#server/studies/studies.listing';
-import { accessTrash, unknownStudy } from '#server/studies/studies.access';
+import { lockTrash, unknownStudy } from '#server/studies/studies.access';
 import { findStudy, findStudyIdByKey, insertStudy, setDeleted } from '#server/studies/studies.repository';
 
 interface NewStudy {
@@ -79,12 +79,16 @@ export async function trash(
   viewer: Viewer,
   studyId: string,
 ): Promise<void> {
-  const access = await accessTrash(db, viewer, studyId, 'delete');
-  if (access.deletedAt === null) await setDeleted(db, studyId, clock());
+  await inTransaction(db, async (tx) => {
+    const access = await lockTrash(tx, viewer, studyId, 'delete');
+    if (access.deletedAt === null) await setDeleted(tx, studyId, clock());
+  });
 }
 
 export async function restore({ db }: Pick<Deps, 'db'>, viewer: Viewer, studyId: string): Promise<Study> {
-  await accessTrash(db, viewer, studyId, 'delete');
-  await setDeleted(db, studyId, null);
-  return findStudy(db, viewer, studyId);
+  return inTransaction(db, async (tx) => {
+    await lockTrash(tx, viewer, studyId, 'delete');
+    await setDeleted(tx, studyId, null);
+    return findStudy(tx, viewer, studyId);
+  });
 }

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
-import { expect, test } from 'vitest';
+import type { PoolConnection, RowDataPacket } from 'mysql2/promise';
+import { expect, test, vi } from 'vitest';
 import { createTestApp } from '../support/app';
 import { enter, type Person } from '../support/people';
 import { documentOf, makeStudy, saveOf, shareWith } from '../support/studies';
@@ -17,6 +18,14 @@ async function sharedStudy() {
   const path = `/api/studies/${id}/annotations`;
   const read = async (person: Person) => (await person.send('GET', path)).body.annotations;
   return { at, ada, ben, id, path, read };
+}
+
+/** How many statements of the program stand and wait: what locks the study is one of them. */
+async function waitingStatements(connection: PoolConnection): Promise<number> {
+  const [rows] = await connection.query<RowDataPacket[]>(
+    "SELECT id FROM information_schema.processlist WHERE info LIKE '%for update' AND id <> CONNECTION_ID()",
+  );
+  return rows.length;
 }
 
 test('when somebody annotates a study and a chord, then everybody who sees it reads that, oldest first', async () => {
@@ -101,6 +110,21 @@ test('when the right to annotate is taken back, then their remarks stay and they
   await shareWith(ada, id, ben.email, 'view');
   expect((await ben.send('POST', path, remark('More'))).status).toBe(403);
   expect(await read(ben)).toHaveLength(1);
+});
+
+test('when the study is locked while the right to annotate is taken back, then the remark that waits is refused', async () => {
+  const { at, ada, ben, id, path, read } = await sharedStudy();
+  const holder = await at.deps.pool.getConnection();
+  await holder.query('START TRANSACTION');
+  await holder.query('SELECT id FROM studies WHERE id = ? FOR UPDATE', [id]);
+  const waiting = ben.send('POST', path, remark('Too late'));
+  const asked = waiting.then((answer) => answer.status);
+  await vi.waitUntil(async () => (await waitingStatements(holder)) > 0);
+  await holder.query('UPDATE shares SET may = ? WHERE study_id = ?', ['view', id]);
+  await holder.query('COMMIT');
+  holder.release();
+  expect(await asked).toBe(403);
+  expect(await read(ada)).toEqual([]);
 });
 
 test.each([
