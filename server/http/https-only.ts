@@ -5,7 +5,7 @@ import { RequestError } from '#server/http/request-error';
 export function httpsOnly(publicUrl: string): RequestHandler {
   return (req, res, next) => {
     if (req.secure) return next();
-    if (req.path.startsWith('/api/')) {
+    if (/^\/api(\/|$)/i.test(req.path)) {
       return next(new RequestError(403, 'https.required', 'This is served by https only.'));
     }
     res.redirect(308, new URL(req.originalUrl.replace(/^[/\\]+/, '/'), publicUrl).href);

@@ -111,14 +111,10 @@ test('when served on https, then the cookie is bound to the host, at every answe
 
 test('when https is expected but http comes, then the API refuses and a page is sent on', async () => {
   const at = await createTestApp(HTTPS);
-  const api = await somebody(at).sendRaw(
-    'POST',
-    '/api/session',
-    {},
-    { email: 'a@x.example', password: PASSWORD },
-  );
-  expect(api.status).toBe(403);
-  expect(api.body.error.code).toBe('https.required');
+  for (const path of ['/api/session', '/API/session']) {
+    const api = await somebody(at).sendRaw('POST', path, {}, { email: 'a@x.example', password: PASSWORD });
+    expect([api.status, api.body.error.code]).toEqual([403, 'https.required']);
+  }
   const page = await somebody(at).send('GET', '/studies?tab=own');
   expect(page.status).toBe(308);
   expect(page.headers.location).toBe('https://siltline.example/studies?tab=own');
