@@ -1,6 +1,7 @@
 import { createApp } from '#server/app';
 import { composeDeps } from '#server/compose';
 import { readSettings, SettingsError, type Settings } from '#server/env';
+import { describeError } from '#server/http/describe-error';
 import { createClosing } from '#server/setup/closing';
 import { CannotStart } from '#server/setup/data-folder';
 import { leaseBuild } from '#server/setup/lease';
@@ -43,6 +44,6 @@ try {
   process.exit(0);
 } catch (error) {
   const forOperators = error instanceof SettingsError || error instanceof CannotStart;
-  console.error(forOperators ? error.message : error);
+  console.error(forOperators ? error.message : describeError(error));
   process.exit(1);
 }

@@ -2,6 +2,7 @@ import { CannotCreate, createAdministrator } from '#server/accounts/administrato
 import { createPasswords } from '#server/accounts/passwords';
 import { randomSecret } from '#server/accounts/secrets';
 import { readSettings, SettingsError } from '#server/env';
+import { describeError } from '#server/http/describe-error';
 import { withDatabase } from '#server/setup/command';
 import { CannotStart } from '#server/setup/data-folder';
 
@@ -34,6 +35,6 @@ try {
 } catch (error) {
   const forOperators =
     error instanceof SettingsError || error instanceof CannotStart || error instanceof CannotCreate;
-  console.error(forOperators ? error.message : error);
+  console.error(forOperators ? error.message : describeError(error));
   process.exit(1);
 }

@@ -1,4 +1,5 @@
 import type { DatabaseAccess } from '#server/db/access';
+import { CannotStart } from '#server/setup/data-folder';
 import { DATABASE } from '#server/setup/mariadb/accounts';
 import { makeSocketFolder, mariadbFiles } from '#server/setup/mariadb/files';
 import { initialiseMariadb } from '#server/setup/mariadb/initialise';
@@ -16,7 +17,7 @@ export interface EmbeddedMariadb {
 /**
  * Makes the database if there is none, ends what a killed program left running, and starts the server. The caller
  * holds the data folder's lock.
- * @throws {Error} naming the log, if it cannot be started.
+ * @throws {CannotStart} naming the log, if it cannot be started.
  */
 export async function startEmbeddedMariadb(
   dataDir: string,
@@ -38,6 +39,6 @@ export async function startEmbeddedMariadb(
     };
   } catch (error) {
     await remove();
-    throw new Error(`The database cannot be started; ${files.log} says why.`, { cause: error });
+    throw new CannotStart(`The database cannot be started; ${files.log} says why.`, { cause: error });
   }
 }
