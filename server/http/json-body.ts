@@ -1,7 +1,8 @@
 import express, { type RequestHandler } from 'express';
 import { RequestError } from '#server/http/request-error';
 
-export const MAX_BODY_BYTES = 1024 * 1024;
+/** A study of 200 chords with 40 voices each is close to 2 MiB. */
+export const MAX_BODY_BYTES = 3 * 1024 * 1024;
 /** MariaDB refuses JSON nested 32 deep; a study needs 7 levels. */
 export const MAX_JSON_DEPTH = 24;
 const REFUSED_KEYS = new Set(['__proto__', 'constructor', 'prototype']);

@@ -38,6 +38,11 @@ const pitchSchema = z
   .regex(PITCH_PATTERN, 'a pitch is a letter A to G, an accidental and an octave 0 to 8, such as Bb2')
   .refine((name) => /[0-8]$/.test(name) && !name.includes('-'), 'octaves run from 0 to 8');
 
+/** Annotations hang on these ids, so that one names one thing. */
+function namedOnce(things: readonly { readonly id: string }[]): boolean {
+  return new Set(things.map(({ id }) => id)).size === things.length;
+}
+
 export const techniqueSchema = z.strictObject({
   contact: z.enum(CONTACTS).default('ordinary'),
   mute: z.boolean().default(false),
@@ -72,7 +77,10 @@ export const chordSchema = z.strictObject({
   name: z.string().trim().max(40).nullable().default(null),
   beats: z.number().min(0.25).max(64).default(4),
   dynamic: z.enum(DYNAMICS).default('mf'),
-  voices: z.array(voiceSchema).max(MAX_VOICES, `a chord has at most ${MAX_VOICES} voices`),
+  voices: z
+    .array(voiceSchema)
+    .max(MAX_VOICES, `a chord has at most ${MAX_VOICES} voices`)
+    .refine(namedOnce, 'two voices of a chord have the same id'),
   /** What clouds on purpose: the whole chord, or some registers. */
   onPurpose: z
     .strictObject({ chord: z.boolean(), registers: z.array(z.enum(REGISTERS)).max(REGISTERS.length) })
@@ -112,7 +120,11 @@ export const studyDocumentSchema = z.strictObject({
   a4Hz: z.number().min(415).max(466),
   intonation: z.enum(INTONATIONS),
   ensemble: ensembleSchema,
-  chords: z.array(savedChordSchema).min(1, 'a study has at least one chord').max(MAX_CHORDS),
+  chords: z
+    .array(savedChordSchema)
+    .min(1, 'a study has at least one chord')
+    .max(MAX_CHORDS)
+    .refine(namedOnce, 'two chords of a study have the same id'),
 });
 export type StudyDocument = z.infer<typeof studyDocumentSchema>;
 

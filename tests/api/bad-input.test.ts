@@ -1,5 +1,7 @@
+import { randomUUID } from 'node:crypto';
 import { gzipSync } from 'node:zlib';
 import { expect, test } from 'vitest';
+import { MAX_CHORDS, MAX_VOICES } from '#shared/study/study.document';
 import { createTestApp, type TestApp } from '../support/app';
 import { enter, somebody, type Somebody } from '../support/people';
 import { documentOf, makeStudy } from '../support/studies';
@@ -53,16 +55,16 @@ test.each([
   expect([answer.status, answer.body.error.code]).toEqual([415, 'media.unsupported']);
 });
 
-test('when a body has 10 MB, or 1 MB and a byte, or unpacks to more, then it is too large', async () => {
+test('when a body has 10 MB, or 3 MB and a byte, or unpacks to more, then it is too large', async () => {
   const at = await createTestApp();
   const text = (bytes: number) => JSON.stringify({ email: 'x'.repeat(bytes - '{"email":""}'.length) });
-  for (const bytes of [10 * MIB, MIB + 1]) {
+  for (const bytes of [10 * MIB, 3 * MIB + 1]) {
     const answer = await sendBytes(at, text(bytes));
     expect([answer.status, answer.body.error.code]).toEqual([413, 'body.tooLarge']);
   }
   const bomb = await sendBytes(at, gzipSync(text(50 * MIB)), { ...JSON_TYPE, 'content-encoding': 'gzip' });
   expect([bomb.status, bomb.body.error.code]).toEqual([413, 'body.tooLarge']);
-  expect((await sendBytes(at, text(MIB))).status).toBe(422);
+  expect((await sendBytes(at, text(3 * MIB))).status).toBe(422);
 });
 
 test('when a body is wrong in several places, then every one of them is named', async () => {
@@ -168,4 +170,37 @@ test('when visitors send what only signed-in people may, then they are asked to 
   const headers = { 'x-csrf-token': await tokenOf(visitor), ...JSON_TYPE };
   const answer = await visitor.sendRaw('POST', '/api/studies', headers, '{"not json');
   expect([answer.status, answer.body.error.code]).toEqual([401, 'session.required']);
+});
+
+test('when two chords of a study, or two voices of a chord, have one id, then it is not kept', async () => {
+  const owner = await enter(await createTestApp());
+  const study = documentOf('Twins', ['chord-1', 'chord-2']);
+  const [first, second] = study.chords;
+  const twinChords = { ...study, chords: [first, { ...second, id: 'chord-1' }] };
+  const twinVoices = {
+    ...study,
+    chords: [{ ...first, voices: first?.voices.map((voice) => ({ ...voice, id: 'voice-1' })) }],
+  };
+  for (const [document, path] of [
+    [twinChords, 'body.document.chords'],
+    [twinVoices, 'body.document.chords.0.voices'],
+  ] as const) {
+    const answer = await owner.send('POST', '/api/studies', { document, requestKey: randomUUID() });
+    expect(answer.status).toBe(422);
+    expect(answer.body.error.details.map((fault: { path: string }) => fault.path)).toEqual([path]);
+  }
+});
+
+test('when a study is as large as one may be, then it is kept whole', async () => {
+  const owner = await enter(await createTestApp());
+  const ids = (kind: string, count: number) => Array.from({ length: count }, (_, n) => `${kind}-${1000 + n}`);
+  const study = documentOf('The longest', ids('chord', MAX_CHORDS));
+  const full = study.chords.map((chord) => ({
+    ...chord,
+    voices: ids(chord.id, MAX_VOICES).map((id) => ({ ...chord.voices[0], id })),
+  }));
+  const document = { ...study, chords: full };
+  const answer = await owner.send('POST', '/api/studies', { document, requestKey: randomUUID() });
+  expect(answer.status).toBe(200);
+  expect(answer.body.document).toEqual(document);
 });
