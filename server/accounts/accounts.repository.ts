@@ -63,3 +63,15 @@ export async function markConfirmed(db: Connection, id: string, now: Date): Prom
 export async function setPasswordHash(db: Connection, id: string, passwordHash: string): Promise<void> {
   await db.update(accounts).set({ passwordHash }).where(eq(accounts.id, id));
 }
+
+/** Where the hash is no longer the one that was checked, the password was changed meanwhile: that one stays. */
+export async function replacePasswordHash(
+  db: Connection,
+  { id, passwordHash: checked }: Pick<AccountRecord, 'id' | 'passwordHash'>,
+  passwordHash: string,
+): Promise<void> {
+  await db
+    .update(accounts)
+    .set({ passwordHash })
+    .where(and(eq(accounts.id, id), eq(accounts.passwordHash, checked)));
+}

@@ -3,6 +3,7 @@ import type { Request, RequestHandler, Response } from 'express';
 import { findAccount } from '#server/accounts/accounts.repository';
 import type { Db } from '#server/db/connection';
 import { IDLE_MS } from '#server/sessions/sessions.repository';
+import { csrfTokenFor } from '#server/sessions/csrf';
 import { SessionStore } from '#server/sessions/session.store';
 
 interface Where {
@@ -67,6 +68,8 @@ function settled(work: (done: (error?: unknown) => void) => void): Promise<void>
 export async function enterSession(req: Request, accountId: string): Promise<void> {
   await settled((done) => req.session.regenerate(done));
   req.session.accountId = accountId;
+  // Made now, so that requests that ask for it at the same time are given the same one.
+  csrfTokenFor(req);
   await settled((done) => req.session.save(done));
 }
 

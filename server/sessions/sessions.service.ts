@@ -1,7 +1,7 @@
 import type { Account } from '#shared/contracts/accounts';
 import {
   findAccountByEmail,
-  setPasswordHash,
+  replacePasswordHash,
   type AccountRecord,
 } from '#server/accounts/accounts.repository';
 import { normaliseEmail } from '#server/accounts/email';
@@ -33,7 +33,7 @@ async function renewHash(
   password: string,
 ): Promise<void> {
   if (passwords.isOutdated(account.passwordHash)) {
-    await setPasswordHash(db, account.id, await passwords.hash(password));
+    await replacePasswordHash(db, account, await passwords.hash(password));
   }
 }
 

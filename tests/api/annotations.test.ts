@@ -147,3 +147,9 @@ test('when an annotation holds markup or 4000 characters, then it is kept as typ
   }
   expect(await read(ben)).toHaveLength(2);
 });
+
+test('when somebody who has just signed in asks for the token several times at once, then it is one token', async () => {
+  const { ben } = await sharedStudy();
+  const asked = await Promise.all([1, 2, 3, 4].map(() => ben.send('GET', '/api/session/csrf-token')));
+  expect(new Set(asked.map(({ body }) => body.csrfToken)).size).toBe(1);
+});
