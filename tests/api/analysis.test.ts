@@ -4,7 +4,7 @@ import { COMMON_PRACTICE_ORDERINGS } from '#shared/data/common-practice-ordering
 import { SCORE_CHORDS } from '#shared/data/score-chords';
 import { REGISTERS } from '#shared/voicing/registers';
 import { createTestApp, type TestApp } from '../support/app';
-import { keyName } from '../support/chords';
+import { keyName } from '../support/voicings';
 import { analysisOf, call, faultPaths } from '../support/scripts';
 
 let at: TestApp;

@@ -3,7 +3,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { effectScope, ref, shallowRef } from 'vue';
 import { useHelpfulMoves } from '@/composables/helpful-moves';
 import { judgeIn, type Judge } from '@/composables/judge';
-import { EVEN_SETTINGS, voicing } from '../../support/chords';
+import { EVEN_SETTINGS, voicing } from '../../support/voicings';
 
 const askedOf: string[][] = [];
 const judge: Judge = {

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { applyMove } from '#shared/study/moved.changes';
 import { purposeOf, setOnPurpose } from '#shared/study/on-purpose.changes';
 import { purposeText } from '#shared/voicing/on-purpose.sentences';
-import { chordOf, voicing } from '../../../support/chords';
+import { chordOf, voicing } from '../../../support/voicings';
 
 describe('what clouds on purpose', () => {
   const chord = voicing('C2 E2');

@@ -3,7 +3,7 @@ import { balanceSentences } from '#shared/voicing/balance.sentences';
 import { characterFigures } from '#shared/voicing/character.sentences';
 import { analyseChord, explainRegister } from '#shared/voicing/analysis';
 import { registerFindings } from '#shared/voicing/register.sentences';
-import { EVEN_SETTINGS, voicing } from '../../../support/chords';
+import { EVEN_SETTINGS, voicing } from '../../../support/voicings';
 
 const key = { tonic: 'F', mode: 'major' } as const;
 

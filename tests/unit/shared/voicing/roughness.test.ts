@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest';
 import { analyseChord } from '#shared/voicing/analysis';
 import { pureTonesOf, roughnessOf } from '#shared/voicing/roughness';
-import { EVEN_SETTINGS, voicing } from '../../../support/chords';
+import { EVEN_SETTINGS, voicing } from '../../../support/voicings';
 
 const A4_HZ = EVEN_SETTINGS.a4Hz;
 const soundsOf = (names: string) => analyseChord(voicing(names), EVEN_SETTINGS).voices;

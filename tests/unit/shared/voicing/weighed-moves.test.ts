@@ -6,7 +6,7 @@ import type { Move } from '#shared/voicing/moves/moves';
 import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { weighedMoves } from '#shared/voicing/moves/weighed-moves';
 import { differClearly } from '#shared/voicing/uncertainty';
-import { chordOf, EVEN_SETTINGS, voicing } from '../../../support/chords';
+import { chordOf, EVEN_SETTINGS, voicing } from '../../../support/voicings';
 
 const lowThird = voicing('C2 E2 G3 C4 E4');
 
