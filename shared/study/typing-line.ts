@@ -1,10 +1,11 @@
-import { displayPitch, type NoteNaming } from '#shared/pitch/display';
+import type { NoteNaming } from '#shared/pitch/display';
 import { midiOfName } from '#shared/pitch/names';
-import { SECTIONS, type Section } from '#shared/strings/sections';
+import type { Section } from '#shared/strings/sections';
 import { dealToSections, type Reach } from '#shared/study/dealing';
-import { TYPED_SECTIONS } from '#shared/study/section-names';
-import { MAX_VOICES, type Chord, type Voice } from '#shared/study/study.document';
-import { wordsOf, type TypingFault, type Word } from '#shared/study/typing-line.words';
+import { MAX_VOICES } from '#shared/study/study.document';
+import type { TypedHow } from '#shared/study/typing-line.how';
+import { howOf, playedWords, type PlayedWord, type SaidNote } from '#shared/study/typing-line.notes';
+import { wordsOf, type SaidHow, type TypingFault } from '#shared/study/typing-line.words';
 
 /** A voice as the line gives it. */
 export interface TypedVoice {
@@ -13,6 +14,8 @@ export interface TypedVoice {
   readonly pitch: string;
   /** The same number in one section: one double stop. */
   readonly stop: number | null;
+  /** How it is played; where nothing is said of it, a voice that stood there keeps its own. */
+  readonly how?: TypedHow;
 }
 
 /** What a line says; with faults it says nothing yet. */
@@ -24,33 +27,44 @@ export interface TypedLine {
 /** Notes that are played together: one note, or those of a double stop. */
 interface Group {
   readonly section: Section | null;
-  readonly notes: { readonly pitch: string; readonly start: number; readonly end: number }[];
+  readonly notes: SaidNote[];
 }
 
-type Reading = { groups: Group[]; faults: TypingFault[]; section: Section | null; named: boolean };
+interface Reading {
+  readonly groups: Group[];
+  readonly faults: TypingFault[];
+  section: Section | null;
+  /** What is said of all notes of the section. */
+  said: readonly SaidHow[];
+  named: boolean;
+}
 
-function isNote(word: Word | undefined): boolean {
+function isNote(played: PlayedWord | undefined): boolean {
   // An unreadable note beside a + is already a fault of its own.
-  return word?.kind === 'note' || word?.kind === 'fault';
+  return played?.word.kind === 'note' || played?.word.kind === 'fault';
 }
 
-function readOne(reading: Reading, word: Word, index: number, words: readonly Word[]): void {
+function readOne(
+  reading: Reading,
+  { word, said }: PlayedWord,
+  index: number,
+  all: readonly PlayedWord[],
+): void {
   const { start, end } = word;
-  const before = words[index - 1];
+  const before = all[index - 1];
   if (word.kind === 'fault') reading.faults.push({ start, end, message: word.message });
   if (word.kind === 'section') {
-    reading.section = word.section;
-    reading.named = true;
-    const next = words[index + 1];
-    if (!isNote(next)) reading.faults.push({ start, end, message: 'No note follows this section.' });
+    Object.assign(reading, { section: word.section, said, named: true });
+    if (!isNote(all[index + 1]))
+      reading.faults.push({ start, end, message: 'No note follows this section.' });
   }
-  if (word.kind === 'join' && !(isNote(before) && isNote(words[index + 1]))) {
+  if (word.kind === 'join' && !(isNote(before) && isNote(all[index + 1]))) {
     reading.faults.push({ start, end, message: 'A + stands between the notes of a double stop: A2+F3.' });
   }
   if (word.kind !== 'note') return;
-  const note = { pitch: word.pitch, start, end };
+  const note = { pitch: word.pitch, start, end, said: [...reading.said, ...said] };
   const last = reading.groups.at(-1);
-  if (before?.kind === 'join' && last) last.notes.push(note);
+  if (before?.word.kind === 'join' && last) last.notes.push(note);
   else reading.groups.push({ section: reading.section, notes: [note] });
 }
 
@@ -80,17 +94,25 @@ function dealt(groups: readonly Group[], reach: Reach): Group[] {
   return upwards.map((group, index) => ({ ...group, section: sections[index] ?? null }));
 }
 
-function voicesOf(groups: readonly Group[]): TypedVoice[] {
+function voicesOf(groups: readonly Group[], naming: NoteNaming): TypedLine {
   let stops = 0;
-  return groups.flatMap(({ section, notes }) => {
+  const faults: TypingFault[] = [];
+  const voices = groups.flatMap(({ section, notes }) => {
     const stop = notes.length > 1 ? ++stops : null;
-    return section === null ? [] : notes.map(({ pitch }) => ({ section, pitch, stop }));
+    if (section === null) return [];
+    return notes.map(({ pitch, said }) => {
+      const { how, faults: ofStrings } = howOf(said, section, naming);
+      faults.push(...ofStrings);
+      return { section, pitch, stop, how };
+    });
   });
+  return { voices, faults };
 }
 
 /**
  * Reads the line in which a chord is typed: `DB D2, Vc A2 F3, Va A3` (notes of one section are divided),
- * `Vc A2+F3` (a double stop), or a bare list, dealt to the sections from the bottom.
+ * `Vc A2+F3` (a double stop), `Vc A2[solo pp]` (how it is played), or a bare list, dealt to the sections from
+ * the bottom.
  * @param text as typed
  * @param naming how the reader names notes
  * @param reach where each section plays comfortably, for dealing
@@ -98,31 +120,12 @@ function voicesOf(groups: readonly Group[]): TypedVoice[] {
  * @example parseTypingLine('Vc A2+F3', 'english', reach).voices.length // 2
  */
 export function parseTypingLine(text: string, naming: NoteNaming, reach: Reach): TypedLine {
-  const reading: Reading = { groups: [], faults: [], section: null, named: false };
-  wordsOf(text, naming).forEach((word, index, words) => readOne(reading, word, index, words));
-  const faults = [...reading.faults, ...withoutSection(reading), ...tooMany(reading)];
-  if (faults.length > 0) return { voices: [], faults: faults.sort((a, b) => a.start - b.start) };
-  return { voices: voicesOf(reading.named ? reading.groups : dealt(reading.groups, reach)), faults: [] };
-}
-
-function sectionText(voices: readonly Voice[], naming: NoteNaming): string {
-  const written = new Set<number>();
-  return voices
-    .filter(({ stop }) => stop === null || (!written.has(stop) && written.add(stop)))
-    .map((voice) => (voice.stop === null ? [voice] : voices.filter(({ stop }) => stop === voice.stop)))
-    .map((together) => together.map(({ pitch }) => displayPitch(pitch, naming)).join('+'))
-    .join(' ');
-}
-
-/**
- * The inverse: a chord as the line would be typed, from the bottom of the score.
- * @example typingLineOf(chord, 'english') // 'DB D2, Vc A2+F3, Va A3'
- */
-export function typingLineOf(chord: Pick<Chord, 'voices'>, naming: NoteNaming): string {
-  return [...SECTIONS]
-    .reverse()
-    .map((section) => ({ section, voices: chord.voices.filter((voice) => voice.section === section) }))
-    .filter(({ voices }) => voices.length > 0)
-    .map(({ section, voices }) => `${TYPED_SECTIONS[section]} ${sectionText(voices, naming)}`)
-    .join(', ');
+  const { played, faults: ofWords } = playedWords(wordsOf(text, naming));
+  const reading: Reading = { groups: [], faults: [...ofWords], section: null, said: [], named: false };
+  played.forEach((word, index, all) => readOne(reading, word, index, all));
+  const read = [...reading.faults, ...withoutSection(reading), ...tooMany(reading)];
+  const { voices, faults } = voicesOf(reading.named ? reading.groups : dealt(reading.groups, reach), naming);
+  const all = [...read, ...faults];
+  if (all.length > 0) return { voices: [], faults: all.sort((a, b) => a.start - b.start) };
+  return { voices, faults: [] };
 }

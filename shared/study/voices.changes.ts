@@ -12,8 +12,8 @@ export type VoiceSettings = Partial<
   Pick<Voice, 'players' | 'technique' | 'dynamic' | 'string' | 'locked' | 'pitch'>
 >;
 
-/** A double stop or a link of one voice is none. */
-function withoutLoners(voices: readonly Voice[]): Voice[] {
+/** @returns the voices, where a double stop or a link of one voice is none */
+export function withoutLoners(voices: readonly Voice[]): Voice[] {
   const alone = (same: (other: Voice) => boolean): boolean => voices.filter(same).length < 2;
   return voices.map((voice) => {
     const { section, stop, link } = voice;

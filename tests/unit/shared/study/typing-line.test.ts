@@ -4,7 +4,8 @@ import { NOTE_NAMINGS } from '#shared/pitch/display';
 import { SECTIONS } from '#shared/strings/sections';
 import type { Reach } from '#shared/study/dealing';
 import { emptyChord, newVoice } from '#shared/study/new-study';
-import { parseTypingLine, typingLineOf, type TypedVoice } from '#shared/study/typing-line';
+import { parseTypingLine, type TypedVoice } from '#shared/study/typing-line';
+import { typingLineOf } from '#shared/study/typing-line.text';
 
 /** Where the sections are comfortable, near enough for dealing: E1–G3, C2–G4, C3–A5, G3–E6. */
 const reach: Reach = {
