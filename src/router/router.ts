@@ -1,14 +1,16 @@
 import { nextTick } from 'vue';
 import { createRouter, createWebHistory, type RouteLocationNormalized, type Router } from 'vue-router';
+import { setTabTitle } from '@/composables/tab-title';
 import { nextPath } from '@/router/next';
 import { routes } from '@/router/routes';
 import { useSessionStore } from '@/stores/session.store';
 
-export const SITE = 'Siltline';
-
 async function admit(to: RouteLocationNormalized) {
   const session = useSessionStore();
-  await session.load();
+  const asked = session.load();
+  // A page that is open to all does not wait to know who comes.
+  if (!to.meta.for) return true;
+  await asked;
   // Without an answer nobody is turned away: the page itself says what it cannot do.
   if (session.status !== 'ready') return true;
   if (to.meta.for === 'account' && !session.account) return { name: 'sign-in', query: { next: to.fullPath } };
@@ -49,7 +51,7 @@ export function createSiltlineRouter(): Router {
   router.beforeEach(admit);
   router.afterEach((to, from, failure) => {
     if (failure) return;
-    if (to.meta.title) document.title = `${to.meta.title} · ${SITE}`;
+    if (to.meta.title) setTabTitle(to.meta.title);
     const isFirstPage = from.matched.length === 0;
     if (!isFirstPage && to.path !== from.path && !staysInPlace()) void focusHeading();
   });

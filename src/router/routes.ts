@@ -1,4 +1,5 @@
 import type { RouteRecordRaw } from 'vue-router';
+import LabPage from '@/pages/LabPage.vue';
 
 declare module 'vue-router' {
   interface RouteMeta {
@@ -9,11 +10,9 @@ declare module 'vue-router' {
   }
 }
 
-const lab = () => import('@/pages/LabPage.vue').then((module) => module.default);
-
 export const routes: RouteRecordRaw[] = [
-  { path: '/', name: 'lab', component: lab, meta: { title: 'Lab' } },
-  { path: '/studies/:studyId', name: 'study', component: lab, meta: { for: 'account' } },
+  { path: '/', name: 'lab', component: LabPage, meta: { title: 'Lab' } },
+  { path: '/studies/:studyId', name: 'study', component: LabPage, meta: { for: 'account' } },
   {
     path: '/studies',
     name: 'studies',

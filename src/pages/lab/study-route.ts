@@ -1,7 +1,7 @@
 import { useEventListener } from '@vueuse/core';
 import { watch, watchEffect } from 'vue';
 import { useRoute } from 'vue-router';
-import { SITE } from '@/router/router';
+import { setTabTitle } from '@/composables/tab-title';
 import { useBenchStore } from '@/stores/bench.store';
 import { useStudyStore } from '@/stores/study.store';
 
@@ -24,7 +24,7 @@ export function useStudyRoute(): void {
     { immediate: true },
   );
   watchEffect(() => {
-    if (study.study && route.name === 'study') document.title = `${bench.study.title} · ${SITE}`;
+    if (study.study && route.name === 'study') setTabTitle(bench.study.title);
   });
   useEventListener(window, 'beforeunload', (event) => {
     if (study.hasUnsaved && !study.keptInBrowser) event.preventDefault();
