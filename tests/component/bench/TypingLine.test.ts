@@ -1,15 +1,25 @@
 import { mount } from '@vue/test-utils';
 import { afterEach, describe, expect, it } from 'vitest';
+import { DEFAULT_DEAL } from '#shared/study/harmony/deal-choice';
 import { comfortableReach } from '#shared/study/reach';
 import type { TypedVoice } from '#shared/study/typing-line';
 import TypingLine from '@/components/bench/TypingLine.vue';
 import { chordOf } from '../../support/typed-chords';
 
 const reach = comfortableReach('four-string');
+const C_MAJOR = { tonic: 'C', mode: 'major' } as const;
 
 function lineOf(typed: string, props: Partial<InstanceType<typeof TypingLine>['$props']> = {}) {
   const wrapper = mount(TypingLine, {
-    props: { chord: chordOf(typed), naming: 'english', reach, readOnly: false, ...props },
+    props: {
+      chord: chordOf(typed),
+      naming: 'english',
+      reach,
+      readOnly: false,
+      spelling: C_MAJOR,
+      deal: DEFAULT_DEAL,
+      ...props,
+    },
     attachTo: document.body,
   });
   const field = wrapper.get('input');
@@ -94,6 +104,35 @@ describe('the typing line', () => {
     expect(lastTyped()).toBeUndefined();
     await field.trigger('keydown', { key: 'Enter' });
     expect(lastTyped()).toEqual([]);
+  });
+
+  it('when a chord symbol is typed, then it is told how it is understood, and dealt with Enter', async () => {
+    const { wrapper, field, type, lastTyped } = lineOf('');
+    await type('Dm');
+    expect(lastTyped()).toBeUndefined();
+    expect(wrapper.text()).toContain('Dm: D F A, in open position.');
+    await field.trigger('keydown', { key: 'Enter' });
+    expect(lastTyped()?.[0]).toBe('doubleBass D2');
+    expect(lastTyped()).toHaveLength(5);
+    expect(wrapper.emitted('end')).toHaveLength(1);
+  });
+
+  it('when a numeral is typed, then it is read in the key', async () => {
+    const { field, type, lastTyped } = lineOf('', { spelling: { tonic: 'F', mode: 'major' } });
+    await type('V7/V close');
+    await field.trigger('keydown', { key: 'Enter' });
+    expect(lastTyped()?.[0]).toBe('doubleBass G2');
+  });
+
+  it('when the melody is locked, then a chord is dealt round it', async () => {
+    const { field, type, lastTyped } = lineOf('Vn1 E5[locked]');
+    await type('Am');
+    await field.trigger('keydown', { key: 'Enter' });
+    expect(lastTyped()).toContain('violin1 E5');
+  });
+
+  it('when how a note is played is set, then the line says it', () => {
+    expect(lineOf('Vc A2[solo pp III]').field.element.value).toBe('Vc A2[solo pp III]');
   });
 
   it('when the study may only be read, then the line may too', () => {
