@@ -13,11 +13,14 @@ import { createMeasurements } from '#server/measures/measurements';
 import type { Closing } from '#server/setup/closing';
 import { openDatabase } from '#server/setup/database';
 import { migrateDatabase } from '#server/setup/migration';
+import { startSummaries } from '#server/studies/summaries';
 
 const clock = () => new Date();
 
 /** A mail that is cut off is sent again after the next start. */
 const MAIL_PATIENCE_MS = 2000;
+/** A study that is cut off is summed up after the next start. */
+const SUMMARY_PATIENCE_MS = 1000;
 
 /** Puts together what the program works with, in the order in which one needs the other. */
 export async function composeDeps(settings: Settings, log: Logger, closing: Closing): Promise<Deps> {
@@ -33,12 +36,15 @@ export async function composeDeps(settings: Settings, log: Logger, closing: Clos
   closing.add(passwords.close);
   const measurements = createMeasurements();
   closing.add(measurements.close);
+  const summaries = startSummaries({ db, log, measurements });
+  closing.add(summaries.stop, SUMMARY_PATIENCE_MS);
   const transport = openTransport(smtpUrl);
   const mailer = startMailSender({ db, log, clock, transport, mailFrom: env.mailFrom });
   closing.add(mailer.stop, MAIL_PATIENCE_MS);
   closing.add(startPruning({ db, log, clock }));
-  const deps: Deps = { env, db, pool, log, mailer, passwords, measurements, clock };
+  const deps: Deps = { env, db, pool, log, mailer, passwords, measurements, summaries, clock };
   if (env.mode === 'demo' && (await isEmpty(db))) await seedDemo(deps);
+  summaries.kick();
   return deps;
 }
 

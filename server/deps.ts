@@ -5,6 +5,7 @@ import type { Db } from '#server/db/connection';
 import type { Env } from '#server/env';
 import type { MailSender } from '#server/mail/mail-sender';
 import type { Measurements } from '#server/measures/measurements';
+import type { Summaries } from '#server/studies/summaries';
 
 /** Everything that the program stands on, made once at the start and passed in. */
 export interface Deps {
@@ -16,4 +17,5 @@ export interface Deps {
   readonly passwords: Passwords;
   readonly mailer: MailSender;
   readonly measurements: Measurements;
+  readonly summaries: Summaries;
 }

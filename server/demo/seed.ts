@@ -43,7 +43,8 @@ async function seedStudy(
   const studyId = randomSecret();
   const savedBy = idOf(people, study.owner);
   const document = buildDemoDocument(study);
-  await insertStudy(tx, { id: studyId, ownerId: savedBy, requestKey: randomUUID(), now: savedAt });
+  const row = { id: studyId, ownerId: savedBy, requestKey: randomUUID(), now: savedAt, document };
+  await insertStudy(tx, row);
   const save = { studyId, basedOn: 0, document, savedBy, savedAt, requestKey: randomUUID() };
   await insertSave(tx, save, { kind: 'accepted', number: 1 });
   for (const share of study.shares) {

@@ -7,14 +7,19 @@ import {
   type RoughnessAnswer,
   type RoughnessRequest,
 } from '#shared/contracts/measures';
+import { chordProfileSchema, type ChordProfile } from '#shared/contracts/chord-profiles';
+import type { Chord } from '#shared/study/study.document';
+import type { SoundSettings } from '#shared/voicing/analysis';
 import type { MeasureJob } from '#server/measures/measures.worker';
 import { createWorkerPool } from '#server/workers/worker-pool';
 
-/** What is computed for scripts and lessons. */
+/** What is computed beside the event loop. */
 export interface Measurements {
   analyse(request: AnalysisRequest): Promise<Analysis>;
   roughness(request: RoughnessRequest): Promise<RoughnessAnswer>;
   limits(request: LimitsRequest): Promise<LimitsAnswer>;
+  /** For the table of studies. */
+  profile(chord: Chord, settings: SoundSettings): Promise<ChordProfile>;
   close(): Promise<void>;
 }
 
@@ -39,6 +44,8 @@ export function createMeasurements(): Measurements {
     roughness: async (request) =>
       measureRoughness.response.parse(await pool.run({ kind: 'roughness', request })),
     limits: async (request) => measureLimits.response.parse(await pool.run({ kind: 'limits', request })),
+    profile: async (chord, settings) =>
+      chordProfileSchema.parse(await pool.run({ kind: 'profile', chord, settings })),
     close: () => pool.close(),
   };
 }

@@ -1,11 +1,12 @@
 import { isDeepStrictEqual } from 'node:util';
-import type { Study } from '#shared/contracts/studies';
+import type { Merged, SavedStudy } from '#shared/contracts/studies';
 import type { StudyDocument } from '#shared/study/study.document';
 import type { Transaction } from '#server/db/connection';
 import { inTransaction } from '#server/db/transaction';
 import type { Deps } from '#server/deps';
 import type { Viewer } from '#server/http/bind';
 import { invalidInput, RequestError } from '#server/http/request-error';
+import { mergeWithNewest } from '#server/studies/merging';
 import {
   findAcceptedDocument,
   findSaveByKey,
@@ -18,7 +19,12 @@ import {
 import { lockStudy, type StudyAccess } from '#server/studies/studies.access';
 import { findStudy } from '#server/studies/studies.repository';
 
-type SaveDeps = Pick<Deps, 'db' | 'clock'>;
+type SaveDeps = Pick<Deps, 'db' | 'clock' | 'summaries'>;
+
+interface Placed extends SavePlace {
+  /** What others had saved meanwhile, where it was merged with that. */
+  readonly merged: Merged | null;
+}
 
 /** @throws RequestError when a key comes again with something else: it must not pass for done. */
 export function checkSameRequest(kept: unknown, sent: unknown): void {
@@ -26,18 +32,22 @@ export function checkSameRequest(kept: unknown, sent: unknown): void {
   throw new RequestError(409, 'request.reused', 'This request was made before with other content.');
 }
 
-/** Gives the save its place: the next number when it began from the newest, else aside, with nothing lost. */
-async function place(tx: Transaction, study: StudyAccess, save: NewSave): Promise<SavePlace> {
-  if (save.basedOn === study.newestNumber) {
-    const accepted = { kind: 'accepted', number: study.newestNumber + 1 } as const;
-    await insertSave(tx, save, accepted);
-    await noteNewest(tx, study.id, accepted.number, save.savedAt);
-    return accepted;
-  }
+async function accept(tx: Transaction, study: StudyAccess, save: NewSave): Promise<Placed> {
+  const accepted = { kind: 'accepted', number: study.newestNumber + 1 } as const;
+  await insertSave(tx, save, accepted);
+  await noteNewest(tx, save, accepted.number);
+  return { ...accepted, merged: save.merge?.told ?? null };
+}
+
+/** Gives the save its place: the next number, merged where it did not begin from the newest, or aside. */
+async function place(tx: Transaction, study: StudyAccess, save: NewSave): Promise<Placed> {
+  if (save.basedOn === study.newestNumber) return accept(tx, study, save);
+  const merged = await mergeWithNewest(tx, save, study.newestNumber);
+  if (merged !== null) return accept(tx, study, merged);
   const aside = { kind: 'set-aside', number: study.setAsideCount + 1 } as const;
   await insertSave(tx, save, aside);
   await noteSetAside(tx, study.id, aside.number);
-  return aside;
+  return { ...aside, merged: null };
 }
 
 function checkBase(study: StudyAccess, basedOn: number): void {
@@ -63,34 +73,37 @@ async function stale(
 interface Change {
   readonly basedOn: number;
   readonly requestKey: string;
+  readonly deviceKey?: string | undefined;
 }
 
 /**
  * Keeps a change of a study under a lock of it, once for each request key.
  * @param make the document to keep.
- * @throws RequestError 409 `study.stale` when the study moved on; the document is kept aside.
+ * @throws RequestError 409 `study.stale` when it cannot be merged with what was saved since; it is kept aside.
  */
 async function change(
   deps: SaveDeps,
   viewer: Viewer,
   studyId: string,
-  { basedOn, requestKey }: Change,
+  { basedOn, requestKey, deviceKey }: Change,
   make: (tx: Transaction) => Promise<StudyDocument>,
-): Promise<Study> {
+): Promise<SavedStudy> {
   const { db, clock } = deps;
-  const placed = await inTransaction(db, async (tx): Promise<SavePlace> => {
+  const placed = await inTransaction(db, async (tx): Promise<Placed> => {
     const study = await lockStudy(tx, viewer, studyId, 'save');
     checkBase(study, basedOn);
     const document = await make(tx);
     const earlier = await findSaveByKey(tx, studyId, viewer.id, requestKey);
     if (earlier !== null) {
-      checkSameRequest(earlier.document, document);
-      return earlier;
+      checkSameRequest(earlier.merge?.sent ?? earlier.document, document);
+      return { ...earlier, merged: earlier.merge?.told ?? null };
     }
-    return place(tx, study, { studyId, basedOn, document, savedBy: viewer.id, savedAt: clock(), requestKey });
+    const save = { studyId, basedOn, document, savedBy: viewer.id, savedAt: clock(), requestKey, deviceKey };
+    return place(tx, study, save);
   });
   if (placed.kind === 'set-aside') throw await stale(deps, viewer, studyId, placed);
-  return findStudy(db, viewer, studyId, placed.number);
+  deps.summaries.kick();
+  return { ...(await findStudy(db, viewer, studyId, placed.number)), merged: placed.merged };
 }
 
 export function saveDocument(
@@ -98,7 +111,7 @@ export function saveDocument(
   viewer: Viewer,
   studyId: string,
   body: Change & { readonly document: StudyDocument },
-): Promise<Study> {
+): Promise<SavedStudy> {
   return change(deps, viewer, studyId, body, async () => body.document);
 }
 
@@ -108,7 +121,7 @@ export function rename(
   viewer: Viewer,
   studyId: string,
   body: Change & { readonly title: string },
-): Promise<Study> {
+): Promise<SavedStudy> {
   return change(deps, viewer, studyId, body, async (tx) => {
     const document = await findAcceptedDocument(tx, studyId, body.basedOn);
     if (document === null) throw invalidInput([{ path: 'body.basedOn', message: 'that save is not kept' }]);

@@ -1,13 +1,14 @@
 import { and, eq, isNull, type SQL } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/mysql-core';
 import type { Study } from '#shared/contracts/studies';
+import type { StudyDocument } from '#shared/study/study.document';
 import type { Connection, Transaction } from '#server/db/connection';
 import { accounts } from '#server/db/schema/accounts';
 import { saves } from '#server/db/schema/saves';
 import { shares } from '#server/db/schema/shares';
 import { studies } from '#server/db/schema/studies';
 import type { Viewer } from '#server/http/bind';
-import { readDocument } from '#server/studies/documents';
+import { columnsOf, readDocument } from '#server/studies/documents';
 import { relationOf, seenBy, shareOf, unknownStudy } from '#server/studies/studies.access';
 
 /** A study and who made its save; the routes tell the latter only where the contract says so. */
@@ -67,10 +68,11 @@ export async function findStudy(
 
 export async function insertStudy(
   tx: Transaction,
-  study: { id: string; ownerId: string; requestKey: string; now: Date },
+  study: { id: string; ownerId: string; requestKey: string; now: Date; document: StudyDocument },
 ): Promise<void> {
-  const { now, ...row } = study;
-  await tx.insert(studies).values({ ...row, newestNumber: 1, savedAt: now, createdAt: now });
+  const { now, document, ...row } = study;
+  const columns = { newestNumber: 1, savedAt: now, createdAt: now, ...columnsOf(document) };
+  await tx.insert(studies).values({ ...row, ...columns });
 }
 
 export async function findStudyIdByKey(

@@ -39,7 +39,7 @@ export async function makeStudy(
   const id = await inTransaction(db, async (tx) => {
     const now = clock();
     const made = randomSecret();
-    const row = { id: made, ownerId: viewer.id, requestKey, now };
+    const row = { id: made, ownerId: viewer.id, requestKey, now, document };
     if (!(await insertOnce(() => insertStudy(tx, row)))) return findMade(tx, viewer, study);
     const save = { studyId: made, basedOn: 0, document, savedBy: viewer.id, savedAt: now, requestKey };
     await insertSave(tx, save, { kind: 'accepted', number: 1 });

@@ -11,6 +11,9 @@ const requestKeySchema = z.uuid();
 const nothing = z.object({});
 const timeSchema = z.iso.datetime();
 
+/** Names one stretch of editing: a browser's open page. Saves of one page in one stretch show as one version. */
+const deviceKeySchema = idSchema.optional();
+
 /** A study as somebody may see it. `number` is the number of its newest save. */
 export const studySchema = z.object({
   id: z.string(),
@@ -51,7 +54,30 @@ export const readStudy = defineEndpoint({
   response: studySchema,
 });
 
-/** A save names the number it began from. A stale one is set aside, answered 409 `study.stale` with {@link staleDetailsSchema}. */
+/** What others had saved meanwhile, where a save was merged with theirs. */
+export const mergedSchema = z.object({
+  withNumber: z.number().int(),
+  savedByNames: z.array(z.string()),
+  chords: z.array(
+    z.object({
+      change: z.enum(['changed', 'added', 'removed']),
+      place: z.number().int(),
+      name: z.string().nullable(),
+    }),
+  ),
+  settings: z.array(z.string()),
+  reordered: z.boolean(),
+});
+export type Merged = z.infer<typeof mergedSchema>;
+
+/** A study right after a save of it. */
+export const savedStudySchema = studySchema.extend({ merged: mergedSchema.nullable() });
+export type SavedStudy = z.infer<typeof savedStudySchema>;
+
+/**
+ * A save names the number it began from. A stale one is merged with what was saved meanwhile where the two changed
+ * different chords; else it is set aside, answered 409 `study.stale` with {@link staleDetailsSchema}.
+ */
 export const saveStudy = defineEndpoint({
   method: 'PUT',
   path: '/api/studies/:studyId',
@@ -60,8 +86,9 @@ export const saveStudy = defineEndpoint({
     document: studyDocumentSchema,
     basedOn: z.number().int().min(1),
     requestKey: requestKeySchema,
+    deviceKey: deviceKeySchema,
   }),
-  response: studySchema,
+  response: savedStudySchema,
 });
 
 /** What stands beside what: the newest save, and the one just refused, which is kept under its own number. */
@@ -79,8 +106,9 @@ export const renameStudy = defineEndpoint({
     title: z.string().trim().min(1, 'a study needs a title').max(MAX_TITLE),
     basedOn: z.number().int().min(1),
     requestKey: requestKeySchema,
+    deviceKey: deviceKeySchema,
   }),
-  response: studySchema,
+  response: savedStudySchema,
 });
 
 export const deleteStudy = defineEndpoint({

@@ -1,4 +1,5 @@
 import type { DraftDocument } from '#shared/study/draft';
+import { same } from '#shared/study/same';
 import type { Chord } from '#shared/study/study.document';
 
 /** A chord in its place of the progression, counted from 1. */
@@ -34,18 +35,10 @@ const SETTING_WORDS: Readonly<Record<Setting, string>> = {
   a4Hz: 'A4',
   intonation: 'intonation',
   ensemble: 'ensemble',
+  limits: 'low interval limits',
 };
 // Object.keys loses the keys' type; the record above has exactly these.
 const SETTINGS = Object.keys(SETTING_WORDS) as readonly Setting[];
-
-/** Whether two values of a document say the same, whatever the order of their keys. */
-function same(a: unknown, b: unknown): boolean {
-  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return a === b;
-  const [left, right] = [Object.entries(a), new Map(Object.entries(b))];
-  return (
-    left.length === right.size && left.every(([key, value]) => right.has(key) && same(value, right.get(key)))
-  );
-}
 
 /**
  * @returns whether two documents say the same

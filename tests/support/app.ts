@@ -38,6 +38,7 @@ export async function createTestApp(settings: Readonly<Record<string, string>> =
     pool,
     passwords,
     measurements,
+    summaries: { kick: () => undefined, stop: () => Promise.resolve() },
     log: pino({ level: 'silent' }),
     clock: () => new Date(now),
     mailer: { kick: () => undefined, stop: () => Promise.resolve() },
