@@ -8,6 +8,7 @@ export function soundsAlike(a: VoiceSound, b: VoiceSound): boolean {
   return (
     a.section === b.section &&
     a.technique.stroke === b.technique.stroke &&
+    a.players === b.players &&
     a.partials.length === b.partials.length &&
     a.partials.every(({ frequencyHz, levelDb }, index) => {
       const other = b.partials[index];

@@ -1,6 +1,7 @@
-import { Analyser, Compressor, Gain, getDestination, Panner, WaveShaper } from 'tone';
+import { Analyser, Compressor, Gain, Panner, WaveShaper, type BaseContext } from 'tone';
 import { amplitudeOf, levelOf } from '@/audio/levels';
 import { makeUpGain } from '@/audio/make-up-gain';
+import { buildRoom } from '@/audio/room-node';
 import { SEATS } from '@/audio/seats';
 import { SECTIONS, type Section } from '#shared/strings/sections';
 import type { Decibels } from '#shared/units';
@@ -12,6 +13,9 @@ export interface Master {
   /** The common scale of what is played: at once in silence, gliding otherwise. */
   setScale(scale: number, at: number, glide: boolean): void;
   setVolume(volume: Decibels, at: number): void;
+  setRoom(on: boolean, at: number): void;
+  /** Lets what still rings in the room fall silent at once. */
+  emptyRoom(): void;
   peak(): Decibels;
 }
 
@@ -23,16 +27,24 @@ const CEILING = [-1, 1];
 const GLIDE_SECONDS = 0.05;
 const METER_SAMPLES = 1024;
 
-function seatOf(section: Section, into: Gain): Gain {
-  const panner = new Panner(SEATS[section]).connect(into);
-  return new Gain(1).connect(panner);
+/** How the way out begins. */
+export interface MasterSettings {
+  readonly volume: Decibels;
+  readonly room: boolean;
+  /** Nothing is held down where the whole is brought to its level afterwards. */
+  readonly limited: boolean;
 }
 
-function limited(input: Gain): Gain {
-  const exact = new Gain(1 / makeUpGain(LIMITER.threshold, LIMITER.ratio));
-  const ceiling = new WaveShaper(CEILING);
-  const output = new Gain(1);
-  input.chain(new Compressor(LIMITER), exact, ceiling, output);
+function seatOf(context: BaseContext, section: Section, into: Gain): Gain {
+  const panner = new Panner({ context, pan: SEATS[section] }).connect(into);
+  return new Gain({ context, gain: 1 }).connect(panner);
+}
+
+function limited(context: BaseContext, input: Gain): Gain {
+  const exact = new Gain({ context, gain: 1 / makeUpGain(LIMITER.threshold, LIMITER.ratio) });
+  const ceiling = new WaveShaper({ context, mapping: CEILING });
+  const output = new Gain({ context, gain: 1 });
+  input.chain(new Compressor({ context, ...LIMITER }), exact, ceiling, output);
   return output;
 }
 
@@ -43,14 +55,15 @@ function peakOf(meter: Analyser<2>): Decibels {
   );
 }
 
-/** Builds the way out: seats, common scale, volume, limiter, ceiling, meter. */
-export function buildMaster(volume: Decibels): Master {
-  const scale = new Gain(0);
-  const loudness = new Gain(amplitudeOf(volume));
-  const meter = new Analyser({ type: 'waveform', size: METER_SAMPLES, channels: 2 });
-  scale.connect(loudness);
-  limited(loudness).fan(meter, getDestination());
-  const seats = new Map(SECTIONS.map((section) => [section, seatOf(section, scale)]));
+/** Builds the way out: seats, common scale, room, volume, limiter, ceiling, meter. */
+export function buildMaster(context: BaseContext, settings: MasterSettings): Master {
+  const loudness = new Gain({ context, gain: amplitudeOf(settings.volume) });
+  const room = buildRoom(context, loudness, settings.room);
+  const scale = new Gain({ context, gain: 0 }).connect(room.input);
+  const meter = new Analyser({ context, type: 'waveform', size: METER_SAMPLES, channels: 2 });
+  const output = settings.limited ? limited(context, loudness) : loudness;
+  output.fan(meter, context.destination);
+  const seats = new Map(SECTIONS.map((section) => [section, seatOf(context, section, scale)]));
   return {
     seat: (section) => seats.get(section) ?? scale,
     setSections(heard, at) {
@@ -63,6 +76,8 @@ export function buildMaster(volume: Decibels): Master {
       else scale.gain.cancelScheduledValues(0).setValueAtTime(value, at);
     },
     setVolume: (value, at) => void loudness.gain.linearRampTo(amplitudeOf(value), GLIDE_SECONDS, at),
+    setRoom: room.setOn,
+    emptyRoom: room.empty,
     peak: () => peakOf(meter),
   };
 }

@@ -83,3 +83,41 @@ export function sounding(schedule: readonly TimedSound[], second: number): Timed
   );
   return begun.at(-1) ?? null;
 }
+
+/** Long enough to take in each partial before the next. Chosen. */
+export const PARTIAL_STEP_SECONDS = 0.7;
+
+/** @returns the key under which a partial of a voice is played */
+export function partialKey(voiceId: string, n: number): string {
+  return `${voiceId} ${n}`;
+}
+
+/**
+ * One voice's partials one after another, each as strong as it is in the chord, from the fundamental up.
+ * @returns one entry for each partial, under its {@link partialKey}
+ * @example partialsSchedule({ ...voice, partials: [] }) // []
+ */
+export function partialsSchedule(sound: VoiceSound): readonly TimedSound[] {
+  return sound.partials.map((partial, index) => ({
+    key: partialKey(sound.id, partial.n),
+    startSeconds: index * PARTIAL_STEP_SECONDS,
+    seconds: PARTIAL_STEP_SECONDS,
+    sounds: [{ ...sound, partials: [partial] }],
+  }));
+}
+
+/** A partial of a voice that sounds by itself. */
+export interface SoundingPartial {
+  readonly voiceId: string;
+  readonly n: number;
+}
+
+/**
+ * The inverse of {@link partialKey}.
+ * @returns null where the key names no partial
+ * @example partialOfKey('cello-voice 3') // { voiceId: 'cello-voice', n: 3 }
+ */
+export function partialOfKey(key: string): SoundingPartial | null {
+  const [voiceId, n] = key.split(' ');
+  return voiceId && n ? { voiceId, n: Number(n) } : null;
+}

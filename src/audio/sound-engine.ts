@@ -6,6 +6,16 @@ import type { Decibels } from '#shared/units';
 /** What sounds at the moment. */
 export type SoundState = 'silent' | 'held' | 'playing';
 
+/** One of two chords that are compared. */
+export type Side = 'a' | 'b';
+
+/** A chord that is compared with another. */
+export interface ComparedSound {
+  readonly sounds: readonly VoiceSound[];
+  /** What is taken off it, ≤ 0, so that both are equally loud. */
+  readonly trim: Decibels;
+}
+
 /** Everything that the rest of the program knows about making sound. */
 export interface SoundEngine {
   readonly state: SoundState;
@@ -15,17 +25,25 @@ export interface SoundEngine {
    * @param loudest level of the loudest chord of the common scale
    */
   hold(sounds: readonly VoiceSound[], loudest: Decibels): Promise<void>;
+  /** Holds two chords of which one is heard; either may change as a held one may. */
+  compare(chords: Readonly<Record<Side, ComparedSound>>, heard: Side, loudest: Decibels): Promise<void>;
+  /** Lets the other of two compared chords be heard, at once and without a click. */
+  switchTo(side: Side): void;
   /** Plays a schedule from its beginning. */
   play(schedule: readonly TimedSound[], loudest: Decibels): Promise<void>;
   /** Lets what has not begun yet be played as it is now; nothing where no schedule is being played. */
   revise(schedule: readonly TimedSound[], loudest: Decibels): void;
+  /** Makes beforehand, bit by bit, what these voices need, so that they begin at once when they are asked for. */
+  makeReady(sounds: readonly VoiceSound[]): void;
   /** Ends everything as players do, within a fifth of a second; nothing that was to come begins. */
   stop(): void;
-  /** Ends everything at once. */
+  /** Ends everything at once, the room too. */
   silence(): void;
   /** The sections that are let through, while sounding too. */
   setSections(heard: readonly Section[]): void;
   setVolume(volume: Decibels): void;
+  /** With the room, or dry. */
+  setRoom(on: boolean): void;
   /** @returns the highest peak of the last moments against full scale; −Infinity in silence */
   peak(): Decibels;
   /** @returns the key of what is being played from a schedule; null when nothing is */

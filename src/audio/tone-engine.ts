@@ -1,11 +1,13 @@
-import { Context, getContext, setContext } from 'tone';
-import { soundsAlike } from '@/audio/alike';
-import { CROSSFADE, envelopeOf } from '@/audio/envelope';
-import { scaleFor } from '@/audio/levels';
+import { Context, setContext } from 'tone';
+import { createByAndBy } from '@/audio/by-and-by';
+import { envelopeOf } from '@/audio/envelope';
+import { HeldLines, type HeldVoice } from '@/audio/held-lines';
+import { amplitudeOf, scaleFor } from '@/audio/levels';
 import { prepareLine, type Line } from '@/audio/line';
 import { buildMaster, type Master } from '@/audio/master';
 import { endOf, sounding, startingBetween, type TimedSound } from '@/audio/schedule';
-import type { SoundEngine, SoundState } from '@/audio/sound-engine';
+import type { ComparedSound, Side, SoundEngine, SoundState } from '@/audio/sound-engine';
+import { createWaveStore, type WaveStore } from '@/audio/wave-store';
 import type { Section } from '#shared/strings/sections';
 import type { VoiceSound } from '#shared/voicing/analysis';
 import type { Decibels } from '#shared/units';
@@ -24,13 +26,21 @@ const CLOCK = {
   updateInterval: 1,
   clockSource: 'timeout',
 } as const;
+/** A section's other players join the first once nothing has changed for so long: a drag is not held up. */
+const REST_MILLISECONDS = 60;
+const SIDES = ['a', 'b'] as const;
 /** The panic key: as fast as can be without a crack in the loudspeaker. */
 const SILENCE_SECONDS = 0.008;
 
 class ToneEngine implements SoundEngine {
   state: SoundState = 'silent';
+  private readonly context = new Context(CLOCK);
   private readonly master: Master;
-  private readonly held = new Map<string, Line>();
+  private readonly waves: WaveStore;
+  private readonly held = new HeldLines();
+  private readonly joining = createByAndBy(REST_MILLISECONDS);
+  private readonly readying = createByAndBy(REST_MILLISECONDS);
+  private trims: Readonly<Record<Side, number>> = { a: 1, b: 1 };
   private lines: Line[] = [];
   private schedule: readonly TimedSound[] = [];
   private beganAt = 0;
@@ -39,21 +49,57 @@ class ToneEngine implements SoundEngine {
   private order = 0;
   private pumping: ReturnType<typeof setInterval> | null = null;
 
-  constructor(volume: Decibels) {
-    setContext(new Context(CLOCK), true);
-    this.master = buildMaster(volume);
+  constructor(volume: Decibels, room: boolean) {
+    setContext(this.context, true);
+    this.master = buildMaster(this.context, { volume, room, limited: true });
+    this.waves = createWaveStore(this.context);
   }
 
   async hold(sounds: readonly VoiceSound[], loudest: Decibels): Promise<void> {
+    await this.keep(
+      sounds.map((sound) => ({ side: 'a', sound, presence: 1 })),
+      loudest,
+    );
+  }
+
+  async compare(
+    chords: Readonly<Record<Side, ComparedSound>>,
+    heard: Side,
+    loudest: Decibels,
+  ): Promise<void> {
+    this.trims = { a: amplitudeOf(chords.a.trim), b: amplitudeOf(chords.b.trim) };
+    const voices = SIDES.flatMap((side) =>
+      chords[side].sounds.map((sound) => ({ side, sound, presence: side === heard ? this.trims[side] : 0 })),
+    );
+    await this.keep(voices, loudest);
+  }
+
+  switchTo(heard: Side): void {
+    this.held.setPresence((side) => (side === heard ? this.trims[side] : 0), this.context.now());
+  }
+
+  makeReady(sounds: readonly VoiceSound[]): void {
+    this.readying.forget();
+    for (const sound of sounds) {
+      this.readying.add(() => void this.waves.of(sound, 'middle'));
+      if (sound.players > 1) this.readying.add(() => void this.waves.of(sound, 'others'));
+    }
+  }
+
+  private async keep(voices: readonly HeldVoice[], loudest: Decibels): Promise<void> {
     if (!(await this.awake())) return;
     if (this.state === 'playing') this.stop();
-    const changed = sounds.filter((sound) => !this.isHeld(sound));
-    const entering = changed.map((sound) => this.prepare(sound));
-    const now = getContext().now();
-    this.rescale(loudest, now);
+    const entered = this.held.hold(
+      voices,
+      (sound) => this.prepare(sound),
+      () => {
+        const now = this.context.now();
+        this.rescale(loudest, now);
+        return now;
+      },
+    );
     this.state = 'held';
-    this.leaveOthers(sounds, now);
-    entering.forEach((line) => this.enter(line, now));
+    this.completeAll(entered);
     this.pump();
   }
 
@@ -62,7 +108,7 @@ class ToneEngine implements SoundEngine {
     this.end(null);
     this.schedule = schedule;
     const first = this.prepared(startingBetween(schedule, 0, HORIZON));
-    this.beganAt = getContext().now();
+    this.beganAt = this.context.now();
     this.handedOver = HORIZON;
     this.rescale(loudest, this.beganAt);
     this.state = 'playing';
@@ -73,7 +119,7 @@ class ToneEngine implements SoundEngine {
   revise(schedule: readonly TimedSound[], loudest: Decibels): void {
     if (this.state !== 'playing') return;
     this.schedule = schedule;
-    this.rescale(loudest, getContext().now());
+    this.rescale(loudest, this.context.now());
   }
 
   stop(): void {
@@ -84,14 +130,19 @@ class ToneEngine implements SoundEngine {
   silence(): void {
     this.order += 1;
     this.end(SILENCE_SECONDS);
+    this.master.emptyRoom();
   }
 
   setSections(heard: readonly Section[]): void {
-    this.master.setSections(heard, getContext().now());
+    this.master.setSections(heard, this.context.now());
   }
 
   setVolume(volume: Decibels): void {
-    this.master.setVolume(volume, getContext().now());
+    this.master.setVolume(volume, this.context.now());
+  }
+
+  setRoom(on: boolean): void {
+    this.master.setRoom(on, this.context.now());
   }
 
   peak(): Decibels {
@@ -104,7 +155,7 @@ class ToneEngine implements SoundEngine {
   }
 
   async wake(): Promise<void> {
-    if (getContext().state !== 'running') await getContext().resume();
+    if (this.context.state !== 'running') await this.context.resume();
   }
 
   /** @returns false where another order has come while the browser was waking the sound up */
@@ -116,7 +167,7 @@ class ToneEngine implements SoundEngine {
   }
 
   private elapsed(): number {
-    return getContext().immediate() - this.beganAt;
+    return this.context.immediate() - this.beganAt;
   }
 
   /** In silence the scale is set at once; while something sounds it glides. */
@@ -126,36 +177,26 @@ class ToneEngine implements SoundEngine {
   }
 
   private prepare(sound: VoiceSound): Line {
-    const line = prepareLine(sound, this.master.seat(sound.section));
+    const line = prepareLine(this.context, this.waves, sound, this.master.seat(sound.section));
     this.lines.push(line);
     return line;
   }
 
-  private isHeld(sound: VoiceSound): boolean {
-    const line = this.held.get(sound.id);
-    return line !== undefined && soundsAlike(line.sound, sound);
-  }
-
-  private leaveOthers(sounds: readonly VoiceSound[], now: number): void {
-    const staying = new Set(sounds.map(({ id }) => id));
-    this.held.forEach((line, id) => {
-      if (staying.has(id)) return;
-      line.release(now, envelopeOf(line.sound.technique).release);
-      this.held.delete(id);
-    });
-  }
-
-  /** A note takes the place of the one that its voice held before, or begins as a player would. */
-  private enter(line: Line, now: number): void {
-    const before = this.held.get(line.sound.id);
-    before?.release(now, CROSSFADE.release);
-    line.begin(now, before ? CROSSFADE : envelopeOf(line.sound.technique));
-    this.held.set(line.sound.id, line);
+  /** Sections whose waves are there are complete from the beginning, others a little later. */
+  private completeAll(lines: readonly Line[]): void {
+    for (const line of lines) {
+      const complete = (): void => line.complete(this.context.now());
+      if (this.waves.has(line.sound, 'others')) complete();
+      else this.joining.add(complete);
+    }
   }
 
   private end(seconds: number | null): void {
-    const now = getContext().now();
-    this.lines.forEach((line) => line.release(now, seconds ?? envelopeOf(line.sound.technique).release));
+    const now = this.context.now();
+    this.lines.forEach(({ sound, release }) =>
+      release(now, seconds ?? envelopeOf(sound.technique, sound.midi).release),
+    );
+    this.joining.forget();
     this.held.clear();
     this.schedule = [];
     this.state = 'silent';
@@ -163,7 +204,7 @@ class ToneEngine implements SoundEngine {
 
   /** Hands what comes next to the audio clock and puts away what has ended. */
   private pump(): void {
-    const now = getContext().immediate();
+    const now = this.context.immediate();
     if (this.state === 'playing') this.handOver();
     this.lines.filter((line) => line.endsAt < now).forEach((line) => line.dispose());
     this.lines = this.lines.filter((line) => line.endsAt >= now);
@@ -188,10 +229,11 @@ class ToneEngine implements SoundEngine {
     return entries.flatMap(({ startSeconds, seconds, sounds }) =>
       sounds.map((sound) => {
         const line = this.prepare(sound);
-        const envelope = envelopeOf(sound.technique);
+        const envelope = envelopeOf(sound.technique, sound.midi);
         return () => {
           line.begin(this.beganAt + startSeconds, envelope);
           line.release(this.beganAt + startSeconds + seconds, envelope.release);
+          this.completeAll([line]);
         };
       }),
     );
@@ -199,6 +241,6 @@ class ToneEngine implements SoundEngine {
 }
 
 /** Makes the one sound engine of the page; call it from a gesture of the reader, or the browser keeps silent. */
-export function createSoundEngine(volume: Decibels): SoundEngine {
-  return new ToneEngine(volume);
+export function createSoundEngine(volume: Decibels, room: boolean): SoundEngine {
+  return new ToneEngine(volume, room);
 }

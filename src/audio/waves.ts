@@ -27,13 +27,25 @@ function inOneSeries(a: Partial, b: Partial): boolean {
   return Math.abs(a.frequencyHz / a.n - base) < SAME_SERIES * base;
 }
 
-function waveOf(series: readonly Partial[], fundamentalHz: Hertz, seed: number): Wave {
+/** Which wave of a voice: the middle's, or the one a quarter of a period from it in every partial. */
+export type WaveKind = 'middle' | 'others';
+
+const QUARTER_TURN = Math.PI / 2;
+
+/** The others stand before or behind the middle, from partial to partial in no simple order. */
+function turnOf(n: number, seed: number, kind: WaveKind): number {
+  if (kind === 'middle') return 0;
+  return Math.cos(phaseOf(n, seed + 1)) < 0 ? -QUARTER_TURN : QUARTER_TURN;
+}
+
+function waveOf(series: readonly Partial[], fundamentalHz: Hertz, seed: number, kind: WaveKind): Wave {
   const length = series.reduce((most, { n }) => Math.max(most, n), 0) + 1;
   const wave = { fundamentalHz, real: new Float32Array(length), imag: new Float32Array(length) };
   for (const { n, levelDb } of series) {
     const amplitude = amplitudeOf(levelDb);
-    wave.real[n] = amplitude * Math.cos(phaseOf(n, seed));
-    wave.imag[n] = amplitude * Math.sin(phaseOf(n, seed));
+    const phase = phaseOf(n, seed) + turnOf(n, seed, kind);
+    wave.real[n] = amplitude * Math.cos(phase);
+    wave.imag[n] = amplitude * Math.sin(phase);
   }
   return wave;
 }
@@ -44,10 +56,15 @@ function waveOf(series: readonly Partial[], fundamentalHz: Hertz, seed: number):
  * list of partials sounds as it stands.
  * @param partials n ≥ 1, frequencies in hertz > 0
  * @param seed any whole number ≥ 0; voices with different ones are not in phase
+ * @param kind whose wave: the middle's, or that of the others in the section
  * @returns one wave for each harmonic series among the partials; amplitudes against 0 dB
  * @example wavesOf([{ n: 1, frequencyHz: 100, levelDb: 0 }, { n: 2, frequencyHz: 201, levelDb: 0 }], 0).length // 2
  */
-export function wavesOf(partials: readonly Partial[], seed: number): readonly Wave[] {
+export function wavesOf(
+  partials: readonly Partial[],
+  seed: number,
+  kind: WaveKind = 'middle',
+): readonly Wave[] {
   const series: Partial[][] = [];
   for (const partial of partials) {
     const known = series.find(([first]) => first && inOneSeries(partial, first));
@@ -56,7 +73,7 @@ export function wavesOf(partials: readonly Partial[], seed: number): readonly Wa
   }
   return series.flatMap((members) => {
     const [first] = members;
-    return first ? [waveOf(members, first.frequencyHz / first.n, seed)] : [];
+    return first ? [waveOf(members, first.frequencyHz / first.n, seed, kind)] : [];
   });
 }
 

@@ -3,7 +3,7 @@ import type { SoundEngine } from '@/audio/sound-engine';
 import type { Decibels } from '#shared/units';
 
 export type PlaybackStatus = 'idle' | 'loading' | 'ready' | 'error';
-export type LoadEngine = (volume: Decibels) => Promise<SoundEngine>;
+export type LoadEngine = (volume: Decibels, room: boolean) => Promise<SoundEngine>;
 
 interface LazyEngine {
   readonly engine: Readonly<ShallowRef<SoundEngine | null>>;
@@ -15,7 +15,11 @@ interface LazyEngine {
 }
 
 /** The engine is fetched with the first order; where that fails the next order tries again. */
-export function useLazyEngine(load: LoadEngine, volume: Readonly<Ref<Decibels>>): LazyEngine {
+export function useLazyEngine(
+  load: LoadEngine,
+  volume: Readonly<Ref<Decibels>>,
+  room: Readonly<Ref<boolean>>,
+): LazyEngine {
   const engine = shallowRef<SoundEngine | null>(null);
   const status = shallowRef<PlaybackStatus>('idle');
   let loading: Promise<SoundEngine | null> | null = null;
@@ -24,8 +28,10 @@ export function useLazyEngine(load: LoadEngine, volume: Readonly<Ref<Decibels>>)
   async function fetchEngine(): Promise<SoundEngine | null> {
     status.value = 'loading';
     try {
-      engine.value = await load(volume.value);
-      engine.value.setVolume(volume.value);
+      const loaded = await load(volume.value, room.value);
+      loaded.setVolume(volume.value);
+      loaded.setRoom(room.value);
+      engine.value = loaded;
       status.value = 'ready';
     } catch {
       status.value = 'error';

@@ -1,5 +1,5 @@
 import { useEventListener } from '@vueuse/core';
-import type { Playback } from '@/composables/playback';
+import type { Playback } from '@/composables/playback-interface';
 
 /** What answers the space bar itself: fields, buttons, links, and whatever says that it is one; a note does not. */
 const ANSWERS_SPACE =

@@ -1,5 +1,5 @@
 import type { TimedSound } from '@/audio/schedule';
-import type { SoundEngine, SoundState } from '@/audio/sound-engine';
+import type { ComparedSound, Side, SoundEngine, SoundState } from '@/audio/sound-engine';
 import type { Section } from '#shared/strings/sections';
 import type { VoiceSound } from '#shared/voicing/analysis';
 
@@ -14,11 +14,34 @@ export class SilentEngine implements SoundEngine {
   head: string | null = null;
   woken = 0;
   silenced = 0;
+  compared: Readonly<Record<Side, ComparedSound>> | null = null;
+  side: Side | null = null;
+  ready: readonly VoiceSound[] = [];
+  room: boolean | null = null;
 
   async hold(sounds: readonly VoiceSound[], loudest: number): Promise<void> {
     this.held = sounds;
     this.loudest = loudest;
     this.state = 'held';
+  }
+
+  async compare(chords: Readonly<Record<Side, ComparedSound>>, heard: Side, loudest: number): Promise<void> {
+    this.compared = chords;
+    this.side = heard;
+    this.loudest = loudest;
+    this.state = 'held';
+  }
+
+  switchTo(side: Side): void {
+    this.side = side;
+  }
+
+  makeReady(sounds: readonly VoiceSound[]): void {
+    this.ready = sounds;
+  }
+
+  setRoom(on: boolean): void {
+    this.room = on;
   }
 
   async play(schedule: readonly TimedSound[], loudest: number): Promise<void> {

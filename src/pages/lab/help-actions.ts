@@ -6,6 +6,7 @@ import type { ChordAnalysis } from '#shared/voicing/analysis';
 import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { CLEAR_BELOW } from '#shared/voicing/sentences';
 import { soundSettingsOf } from '#shared/voicing/settings';
+import { WHOLE_CHORD } from '@/audio/listening';
 import { keyOfMove, type HelpState } from '@/components/findings/help-text';
 import { analysisOf } from '@/composables/analysis';
 import { useHelpfulMoves } from '@/composables/helpful-moves';
@@ -34,8 +35,8 @@ export function useHelp(
     return isClear.value ? 'clear' : found.state.value;
   });
   const heard = computed(() => {
-    const { listening, mode } = playback;
-    return mode.value === 'hold' && listening.value.kind === 'trial' ? listening.value.key : null;
+    const { value: part } = playback.heard;
+    return part?.kind === 'trial' ? part.key : null;
   });
 
   function hear(move: WeighedMove): void {
@@ -61,9 +62,9 @@ export function useHelp(
     () => bench.chordId,
     () => (asked.value = false),
   );
-  // What was heard in the chord's place is none of it any more: what is held is the chord itself again.
+  // What was heard in the chord's place is none of it any more: what is heard is the chord itself again.
   watch(chord, () => {
-    if (heard.value !== null) void playback.hold();
+    if (heard.value !== null) void playback.hear(WHOLE_CHORD);
   });
   return { purpose, asked, state, moves: found.moves, heard, hear, make, mean, ask };
 }

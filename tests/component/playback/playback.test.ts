@@ -1,7 +1,8 @@
 import { effectScope, nextTick } from 'vue';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import { chordLevel } from '@/audio/levels';
-import { createPlayback, type Playback } from '@/composables/playback';
+import { createPlayback } from '@/composables/playback';
+import type { Playback } from '@/composables/playback-interface';
 import type { SoundEngine } from '@/audio/sound-engine';
 import { SECTIONS } from '#shared/strings/sections';
 import { SilentEngine } from '../../support/silent-engine';
