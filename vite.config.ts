@@ -24,7 +24,7 @@ const lighterQuasar: Plugin = {
 export default defineConfig({
   plugins: [vue({ template: { transformAssetUrls } }), quasar({ sassVariables: false }), lighterQuasar],
   resolve: { alias: { '@': fileURLToPath(new URL('./src', import.meta.url)) } },
-  optimizeDeps: { include: ['tone', 'chart.js', 'tonal'] },
+  optimizeDeps: { include: ['tone', 'chart.js', 'tonal', 'vexflow/core'] },
   server: {
     port: Number(pagesPort),
     strictPort: true,
