@@ -12,6 +12,7 @@ import {
   type VoicingComparison,
 } from '#shared/voicing/comparison';
 import { techniqueChanges } from '#shared/voicing/technique.words';
+import { differClearly } from '#shared/voicing/uncertainty';
 import { possessive, registerName, semitonesText, sentence } from '#shared/voicing/words';
 
 /** How the two voicings are called: short letters, or names. */
@@ -128,9 +129,21 @@ export function limitChangeTexts(
   ];
 }
 
-/** @returns how many pairs stand under their limit in each: `2 → 1` */
-export function limitCountText({ gone, stay, come }: LimitChanges): string {
-  return `${gone.length + stay.length} → ${stay.length + come.length}`;
+/**
+ * Which of several voicings is the clearest, and which of the others differ from it by less than is sure.
+ * @param voicings in any order
+ * @returns nothing for fewer than two
+ * @example clearestText([{ name: 'open', index: 12 }, { name: 'close', index: 60 }]) // 'Clearest: open.'
+ */
+export function clearestText(
+  voicings: readonly { readonly name: string; readonly index: number }[],
+): string | null {
+  const [clearest, ...others] = [...voicings].sort((a, b) => a.index - b.index);
+  if (!clearest || others.length === 0) return null;
+  const alike = others.filter(({ index }) => !differClearly(clearest.index, index)).map(({ name }) => name);
+  if (alike.length === others.length) return 'No clear difference between any of them and the lowest figure.';
+  const beside = alike.length === 0 ? '' : ` No clear difference from it: ${alike.join(', ')}.`;
+  return `Clearest: ${clearest.name}.${beside}`;
 }
 
 function noteOf({ section, players, pitch }: VoiceSound, naming: NoteNaming): string {

@@ -73,6 +73,14 @@ export function soundTheSame({ notes }: VoicingComparison): boolean {
   return notes.every(({ kind }) => kind === 'stays');
 }
 
+/** @returns how many pairs stand under their limit in each */
+export function underLimits({ gone, stay, come }: LimitChanges): {
+  readonly held: number;
+  readonly now: number;
+} {
+  return { held: gone.length + stay.length, now: stay.length + come.length };
+}
+
 function indexChange(held: number, now: number): IndexChange {
   return { held, now, clear: differClearly(held, now) };
 }

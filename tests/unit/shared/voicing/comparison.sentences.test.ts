@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { compareVoicings } from '#shared/voicing/comparison';
 import {
+  clearestText,
   differenceText,
   limitChangeTexts,
-  limitCountText,
   noteChangeTexts,
   registerChangeText,
   verdictText,
@@ -123,12 +123,35 @@ describe('what became of the limits, in words', () => {
       limits: [limit('note-1', 'note-2', 10), limit('note-2', 'note-3', 1)],
     });
     const { limits } = compareVoicings(held, now);
-    expect(limitCountText(limits)).toBe('2 → 2');
     expect(limitChangeTexts(limits, held.voices, now.voices, 'english')).toEqual([
       'F2–A2 (Vc, Vc), a major third, stood under the low limit and is gone.',
       'F2–B2 (Vc, Vc), an augmented fourth, now stands 1 semitone under the low limit.',
       'D2–F2 (DB, Vc), a minor third, still stands under the low limit.',
     ]);
+  });
+});
+
+describe('several voicings in words', () => {
+  it('when one is clearly the clearest, then it is named alone', () => {
+    expect(
+      clearestText([
+        { name: 'close', index: 80 },
+        { name: 'open', index: 12 },
+      ]),
+    ).toBe('Clearest: open.');
+  });
+
+  it('when some lie within the uncertainty of the clearest, then that is said', () => {
+    const voicings = [
+      { name: 'close', index: 80 },
+      { name: 'open', index: 30 },
+      { name: 'wide', index: 30.5 },
+    ];
+    expect(clearestText(voicings)).toBe('Clearest: open. No clear difference from it: wide.');
+    expect(clearestText(voicings.slice(1))).toBe(
+      'No clear difference between any of them and the lowest figure.',
+    );
+    expect(clearestText(voicings.slice(2))).toBeNull();
   });
 });
 

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Section } from '#shared/strings/sections';
-import { compareVoicings, soundTheSame } from '#shared/voicing/comparison';
+import { compareVoicings, soundTheSame, underLimits } from '#shared/voicing/comparison';
 import { matchNotes, type MatchNote } from '#shared/voicing/matching';
 import { analysisOf } from '../../../support/made-up-analyses';
 import { chordOf } from '../../../support/typed-chords';
@@ -131,6 +131,8 @@ describe('two voicings beside each other', () => {
     const { gone, stay, come } = compareVoicings(held, now).limits;
     const ids = (limits: readonly { lowerId: string; upperId: string }[]) =>
       limits.map(({ lowerId, upperId }) => `${lowerId} ${upperId}`);
+    expect(underLimits({ gone, stay: [], come: [] })).toEqual({ held: 1, now: 0 });
+    expect(underLimits({ gone, stay, come })).toEqual({ held: 2, now: 2 });
     expect(ids(gone)).toEqual(['note-2 note-3']);
     expect(ids(stay)).toEqual(['note-1 note-2']);
     expect(ids(come)).toEqual(['note-2 note-3']);

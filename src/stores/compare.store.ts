@@ -1,0 +1,71 @@
+import { defineStore } from 'pinia';
+import { computed, ref, shallowRef } from 'vue';
+import { voicingsOf, type Voicing } from '#shared/study/voicing';
+import { useBenchStore } from '@/stores/bench.store';
+
+/** What stands under the bench while two voicings are compared. */
+export type CompareView = 'comparison' | 'beside' | 'findings';
+
+/** As many small profiles as stand side by side. */
+export const MOST_BESIDE = 8;
+
+/** Two voicings beside each other: one is held, the other lies on the bench, or is brought from elsewhere. */
+export const useCompareStore = defineStore('compare', () => {
+  const bench = useBenchStore();
+  /** A: as it was when it was held, whatever becomes of its chord. */
+  const held = shallowRef<Voicing | null>(null);
+  /** B, where it is not the chord on the bench: only looked at. */
+  const guest = shallowRef<Voicing | null>(null);
+  const beside = shallowRef<readonly Voicing[]>([]);
+  const view = ref<CompareView>('comparison');
+
+  const onBench = computed(
+    () =>
+      voicingsOf(bench.study, { studyId: null, number: null, from: 'on the bench' }).find(
+        ({ chord }) => chord.id === bench.chordId,
+      ) ?? null,
+  );
+  /** B. */
+  const now = computed(() => guest.value ?? onBench.value);
+
+  function hold(voicing: Voicing | null): void {
+    held.value = voicing;
+    if (voicing === null) guest.value = null;
+  }
+
+  /** Holds the chord on the bench as it is. */
+  function holdNow(): void {
+    if (!now.value) return;
+    bench.endGesture();
+    hold({ ...now.value, from: guest.value ? now.value.from : 'as it was when held' });
+    guest.value = null;
+    view.value = 'comparison';
+  }
+
+  /** Takes B from elsewhere; with nothing it is the chord on the bench again. */
+  function bring(voicing: Voicing | null): void {
+    guest.value = voicing;
+  }
+
+  function add(voicings: readonly Voicing[]): void {
+    beside.value = [...beside.value, ...voicings].slice(0, MOST_BESIDE);
+  }
+
+  function remove(voicing: Voicing): void {
+    beside.value = beside.value.filter((other) => other !== voicing);
+  }
+
+  function clear(): void {
+    hold(null);
+    beside.value = [];
+    view.value = 'comparison';
+  }
+
+  const comparing = computed(() => held.value !== null);
+  /** What clouds in the chord on the bench is told where that chord lies in view. */
+  const tellsFindings = computed(
+    () => !comparing.value || (view.value === 'findings' && guest.value === null),
+  );
+  const state = { held, guest, beside, view, now, onBench, comparing, tellsFindings };
+  return { ...state, hold, holdNow, bring, add, remove, clear };
+});
