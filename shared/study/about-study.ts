@@ -5,14 +5,15 @@ import { SECTIONS } from '#shared/strings/sections';
 
 /**
  * Says in one line what a study is set to.
- * @returns its subject if it has one, key, A4 and players from the first violins down
+ * @returns its subject if it has one, key, A4, players from the first violins down, and whether it has low limits of its own
  * @example aboutStudy(newStudy('chord-1')) // 'C major · A4 = 440 Hz · 14.12.10.8.6'
  */
 export function aboutStudy(study: DraftDocument): string {
-  const { key, a4Hz, ensemble, about } = study;
+  const { key, a4Hz, ensemble, about, limits } = study;
   const players = SECTIONS.map((section) => ensemble.players[section]).join('.');
   const facts = [`${tonicName(key.tonic)} ${key.mode}`, `A4 = ${a4Hz} Hz`, players];
-  return [...(about ? [about] : []), ...facts].join(' · ');
+  const own = limits === null ? [] : ['own low limits'];
+  return [...(about ? [about] : []), ...facts, ...own].join(' · ');
 }
 
 const ALTERATIONS: Readonly<Record<string, number>> = { b: -1, '#': 1 };

@@ -47,6 +47,7 @@ export function newStudy(chordId: string): DraftDocument {
     a4Hz: DEFAULT_A4_HZ,
     intonation: 'equal',
     ensemble: DEFAULT_ENSEMBLE,
+    limits: null,
     chords: [emptyChord(chordId)],
   };
 }

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { PITCH_PATTERN } from '#shared/pitch/names';
 import { BASS_KINDS, SECTIONS } from '#shared/strings/sections';
+import { ownLimitsSchema } from '#shared/study/own-limits';
 import { REGISTERS } from '#shared/voicing/registers';
 
 /** Raised whenever a stored document needs an upgrade to be read. */
@@ -37,6 +38,9 @@ const pitchSchema = z
   .string()
   .regex(PITCH_PATTERN, 'a pitch is a letter A to G, an accidental and an octave 0 to 8, such as Bb2')
   .refine((name) => /[0-8]$/.test(name) && !name.includes('-'), 'octaves run from 0 to 8');
+
+/** A note without its octave. */
+const TONIC_PATTERN = /^[A-G](b|#)?$/;
 
 /** Annotations hang on these ids, so that one names one thing. */
 function namedOnce(things: readonly { readonly id: string }[]): boolean {
@@ -85,6 +89,12 @@ export const chordSchema = z.strictObject({
   onPurpose: z
     .strictObject({ chord: z.boolean(), registers: z.array(z.enum(REGISTERS)).max(REGISTERS.length) })
     .default({ chord: false, registers: [] }),
+  /** The root, as a note without its octave, where the bass is played elsewhere: `Bb`. */
+  rootElsewhere: z
+    .string()
+    .regex(TONIC_PATTERN, 'a root is a letter A to G and an accidental')
+    .nullable()
+    .default(null),
 });
 export type Chord = z.infer<typeof chordSchema>;
 
@@ -111,7 +121,7 @@ export const studyDocumentSchema = z.strictObject({
   schemaVersion: z.literal(STUDY_SCHEMA_VERSION),
   title: z.string().trim().min(1, 'a study needs a title').max(MAX_TITLE),
   about: z.string().max(2000).default(''),
-  key: z.strictObject({ tonic: z.string().regex(/^[A-G](b|#)?$/), mode: z.enum(MODES) }),
+  key: z.strictObject({ tonic: z.string().regex(TONIC_PATTERN), mode: z.enum(MODES) }),
   metre: z.strictObject({
     beats: z.number().int().min(1).max(32),
     unit: z.union([z.literal(1), z.literal(2), z.literal(4), z.literal(8), z.literal(16)]),
@@ -120,6 +130,8 @@ export const studyDocumentSchema = z.strictObject({
   a4Hz: z.number().min(415).max(466),
   intonation: z.enum(INTONATIONS),
   ensemble: ensembleSchema,
+  /** The low interval limits in force. */
+  limits: ownLimitsSchema,
   chords: z
     .array(savedChordSchema)
     .min(1, 'a study has at least one chord')

@@ -1,8 +1,9 @@
 import type { Section } from '#shared/strings/sections';
+import { limitsInForce, type OwnLimit } from '#shared/study/own-limits';
 import type { Chord, Dynamic, Ensemble, Intonation, Technique } from '#shared/study/study.document';
 import type { Decibels, Hertz, Midi, Semitones } from '#shared/units';
 import { explainPeak } from '#shared/voicing/explanation';
-import { limitFindings } from '#shared/voicing/limits';
+import { chordLimits, rootBelow } from '#shared/voicing/limits';
 import { joinUnisons, muddinessVoice } from '#shared/voicing/muddiness/joined';
 import type { MuddinessModel } from '#shared/voicing/muddiness/model';
 import { densityOf } from '#shared/voicing/muddiness/model';
@@ -13,12 +14,14 @@ import type { VoiceSource } from '#shared/voicing/sound';
 import { soundOf, sourcesOf } from '#shared/voicing/sound';
 import { uncertaintyOf } from '#shared/voicing/uncertainty';
 
-/** What the sound of a chord depends on besides its voices. */
+/** What the sound of a chord, and what is said of it, depend on besides its voices. */
 export interface SoundSettings {
   readonly a4Hz: Hertz;
   readonly intonation: Intonation;
   readonly ensemble: Ensemble;
   readonly key: { readonly tonic: string };
+  /** A study's own low interval limits; none leaves the published chart in force. */
+  readonly limits?: readonly OwnLimit[] | null;
 }
 
 /** One partial of one voice. 0 dB is the level of one player's loudest partial at mf before the body. */
@@ -52,6 +55,7 @@ export interface RegisterMuddiness {
 
 /** A pair of notes that stands under its low interval limit. */
 export interface LimitFinding {
+  /** A voice, or ROOT_ELSEWHERE. */
   readonly lowerId: string;
   readonly upperId: string;
   /** The chart's name of the interval: `M3`. */
@@ -95,6 +99,8 @@ export interface ChordAnalysis {
   };
   /** The pairs under their limit, the furthest under first. */
   readonly limits: readonly LimitFinding[];
+  /** The root that is played elsewhere, taken just below the lowest note: `C2`. */
+  readonly rootElsewhere?: string | null;
   /** What makes the cloudiest register, largest share first. */
   readonly pairs: readonly PairShare[];
 }
@@ -126,7 +132,8 @@ export function analyseChord(chord: Chord, settings: SoundSettings): ChordAnalys
         at: density > 0 ? at : null,
       })),
     },
-    limits: limitFindings(sources),
+    limits: chordLimits(sources, chord.rootElsewhere, limitsInForce(settings.limits)),
+    rootElsewhere: rootBelow(sources, chord.rootElsewhere),
     pairs: cloudiest ? explainPeak(cloudiest, sources, joined, model) : [],
   };
 }

@@ -1,5 +1,6 @@
 import type { LowIntervalLimit } from '#shared/data/low-interval-limits';
 import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
+import { midiOfName, parsePitch, pitchName } from '#shared/pitch/names';
 import type { Semitones } from '#shared/units';
 import type { LimitFinding, VoiceSound } from '#shared/voicing/analysis';
 
@@ -46,6 +47,42 @@ export function limitFindings(
     rising.slice(index + 1).flatMap((upper) => findingOf(lower, upper, limits)),
   );
   return found.sort((a, b) => b.semitonesBelow - a.semitonesBelow);
+}
+
+/**
+ * A root that is played elsewhere as a pitch: just below the chord, or in unison with its lowest note.
+ * @param notes in any order
+ * @param root a note without its octave; null where the bass is in the chord
+ * @returns the spelt pitch; null without notes or root
+ * @throws RangeError where the root is not a note
+ * @example rootBelow([E2, B2], 'C') // 'C2'
+ */
+export function rootBelow(notes: readonly Note[], root: string | null): string | null {
+  const [lowest] = [...notes].sort((a, b) => a.midi - b.midi);
+  if (!lowest || root === null) return null;
+  const spelt = parsePitch(`${root}0`);
+  if (!spelt) throw new RangeError(`not a root: ${root}`);
+  return pitchName({ ...spelt, octave: Math.floor((lowest.midi - midiOfName(`${root}0`)) / OCTAVE) });
+}
+
+/**
+ * All that stands under a limit in one chord: pairs of its notes, and its lowest note above a root played elsewhere.
+ * @param notes in any order
+ * @param root a note without its octave; null where the bass is in the chord
+ * @param limits the limits in force
+ * @returns the furthest under first
+ * @throws RangeError where the root is not a note
+ * @example chordLimits([E2, B2], 'C', LOW_INTERVAL_LIMITS)[0]?.semitonesBelow // 10
+ */
+export function chordLimits(
+  notes: readonly Note[],
+  root: string | null,
+  limits: readonly LowIntervalLimit[],
+): readonly LimitFinding[] {
+  const pairs = limitFindings(notes, limits);
+  const below = rootBelow(notes, root);
+  const finding = below === null ? null : rootFinding(notes, midiOfName(below) % OCTAVE, limits);
+  return finding ? [...pairs, finding].sort((a, b) => b.semitonesBelow - a.semitonesBelow) : pairs;
 }
 
 function findingOf(lower: Note, upper: Note, limits: readonly LowIntervalLimit[]): readonly LimitFinding[] {

@@ -2,6 +2,8 @@ import { displayPitch, type NoteNaming } from '#shared/pitch/display';
 import { intervalName, withArticle } from '#shared/pitch/interval-names';
 import { parsePitch } from '#shared/pitch/names';
 import type { ChordAnalysis, LimitFinding, PairShare, VoiceSound } from '#shared/voicing/analysis';
+import { rootElsewhereText } from '#shared/voicing/limits.sentences';
+import { ROOT_ELSEWHERE } from '#shared/voicing/limits';
 import { hertzText, possessive, registerName, semitonesText, sentence } from '#shared/voicing/words';
 
 /** One thing worth saying about two notes of a chord. */
@@ -91,6 +93,19 @@ function textOf(pair: Pair, naming: NoteNaming): string {
   return sentence(`${clouds}${meeting ? `: ${meeting}` : ''}.`);
 }
 
+/** What the lowest note does to a root that is played elsewhere, where that passes a limit. */
+function rootFindings(analysis: ChordAnalysis, naming: NoteNaming): readonly Finding[] {
+  return analysis.limits.flatMap((limit) => {
+    const { lowerId, upperId, semitonesBelow } = limit;
+    const upper = analysis.voices.find(({ id }) => id === upperId);
+    const root = analysis.rootElsewhere;
+    if (lowerId !== ROOT_ELSEWHERE || !upper || !root) return [];
+    return [
+      { lowerId, upperId, share: null, semitonesBelow, text: rootElsewhereText(root, upper, limit, naming) },
+    ];
+  });
+}
+
 /**
  * What clouds a chord and why: the pairs under their low interval limit and those with the largest part in
  * the cloudiest register, the largest part first.
@@ -100,14 +115,14 @@ function textOf(pair: Pair, naming: NoteNaming): string {
  * @example findingsOf(analysis, 'english')[0]?.text // 'The cellos’ C2–E2, a major third, stands …'
  */
 export function findingsOf(analysis: ChordAnalysis, naming: NoteNaming): readonly Finding[] {
-  const findings = pairsOf(analysis).map((pair) => ({
+  const inChord: readonly Finding[] = pairsOf(analysis).map((pair) => ({
     lowerId: pair.lower.id,
     upperId: pair.upper.id,
     share: pair.share?.share ?? null,
     semitonesBelow: pair.limit?.semitonesBelow ?? null,
     text: textOf(pair, naming),
   }));
-  return findings.sort(
+  return [...inChord, ...rootFindings(analysis, naming)].sort(
     (a, b) => (b.share ?? 0) - (a.share ?? 0) || (b.semitonesBelow ?? 0) - (a.semitonesBelow ?? 0),
   );
 }

@@ -2,7 +2,9 @@ import type { NoteNaming } from '#shared/pitch/display';
 import { displayPitch } from '#shared/pitch/display';
 import { intervalName, shortIntervalName } from '#shared/pitch/interval-names';
 import { parsePitch } from '#shared/pitch/names';
+import { midiOfName } from '#shared/pitch/names';
 import type { ChordAnalysis, VoiceSound } from '#shared/voicing/analysis';
+import { ROOT_ELSEWHERE } from '#shared/voicing/limits';
 import { spreadLabels } from '@/charts/spread-labels';
 import type { PitchAxis } from '@/charts/pitch-axis';
 import { semitonesText } from '#shared/voicing/words';
@@ -29,6 +31,8 @@ export interface SpacingWords {
   readonly naming: NoteNaming;
   /** Where there is little room. */
   readonly brief: boolean;
+  /** From one line of type to the next, in pixels; of the bench's own type unless given. */
+  readonly labelGap?: number;
 }
 
 /** From one line of 12-pixel type to the next. */
@@ -36,24 +40,30 @@ const LABEL_GAP = 15;
 const MOST_COLUMNS = 4;
 
 type Placed = Omit<SpacingBracket, 'labelY'>;
-type Pair = readonly [VoiceSound, VoiceSound];
+type Note = Pick<VoiceSound, 'id' | 'pitch' | 'midi'>;
+type Pair = readonly [Note, Note];
 
 /** @param brief says only how far a pair stands under its limit, not its name too */
-function words(lower: VoiceSound, upper: VoiceSound, under: number, { naming, brief }: SpacingWords) {
+function words(lower: Note, upper: Note, under: number, { naming, brief }: SpacingWords) {
   const [a, b] = [parsePitch(lower.pitch), parsePitch(upper.pitch)];
   const [name, short] = a && b ? [intervalName(a, b), shortIntervalName(a, b)] : ['', ''];
   const below = under > 0 ? `${Math.round(under)} under` : '';
-  const notes = `${displayPitch(lower.pitch, naming)} to ${displayPitch(upper.pitch, naming)}`;
+  const elsewhere = lower.id === ROOT_ELSEWHERE;
+  const root = elsewhere ? ', played elsewhere,' : '';
+  const notes = `${displayPitch(lower.pitch, naming)}${root} to ${displayPitch(upper.pitch, naming)}`;
   return {
-    label: [brief && below ? '' : short, below].filter((part) => part !== '').join(', '),
+    label: [elsewhere ? 'root' : brief && below ? '' : short, below].filter((part) => part !== '').join(', '),
     spoken: `${notes}: ${name}${under > 0 ? `, ${semitonesText(under)} under its low limit` : ''}`,
   };
 }
 
 /** Neighbours first, then the other pairs under their limit, in the order of the analysis. */
-function pairsOf({ voices, limits }: ChordAnalysis): Pair[] {
+function pairsOf({ voices, limits, rootElsewhere }: ChordAnalysis): Pair[] {
   const rising = [...voices].sort((a, b) => a.midi - b.midi);
-  const byId = new Map(voices.map((voice) => [voice.id, voice]));
+  const root = rootElsewhere
+    ? [{ id: ROOT_ELSEWHERE, pitch: rootElsewhere, midi: midiOfName(rootElsewhere) }]
+    : [];
+  const byId = new Map([...voices, ...root].map((note): [string, Note] => [note.id, note]));
   const neighbours = rising.slice(1).map((upper, index): Pair => [rising[index] ?? upper, upper]);
   const known = new Set(neighbours.map(([lower, upper]) => `${lower.id} ${upper.id}`));
   const others = limits.flatMap(({ lowerId, upperId }): Pair[] => {
@@ -93,20 +103,20 @@ export function spacingOf(
     const ids = { lowerId: lower.id, upperId: upper.id };
     placed.push({ ...ids, top, bottom, column, under: below, ...words(lower, upper, below, wording) });
   });
-  return withLabels(placed, axis);
+  return withLabels(placed, axis, wording.labelGap ?? LABEL_GAP);
 }
 
-function isNeighbour({ voices }: ChordAnalysis, lower: VoiceSound, upper: VoiceSound): boolean {
+function isNeighbour({ voices }: ChordAnalysis, lower: Note, upper: Note): boolean {
   return voices.every(({ midi }) => midi <= lower.midi || midi >= upper.midi);
 }
 
-function withLabels(placed: readonly Placed[], axis: PitchAxis): SpacingBracket[] {
-  const room = Math.floor((axis.height - axis.strip) / LABEL_GAP);
+function withLabels(placed: readonly Placed[], axis: PitchAxis, gap: number): SpacingBracket[] {
+  const room = Math.floor((axis.height - axis.strip) / gap);
   const worded = new Set([...placed].sort((a, b) => b.under - a.under).slice(0, room));
   const labelled = placed.filter((bracket) => worded.has(bracket));
   const middles = labelled.map(({ top, bottom }) => (top + bottom) / 2);
-  const bounds = { top: axis.strip, bottom: axis.height - LABEL_GAP / 2 };
-  const ys = new Map(spreadLabels(middles, LABEL_GAP, bounds).map((y, index) => [labelled[index], y]));
+  const bounds = { top: axis.strip, bottom: axis.height - gap / 2 };
+  const ys = new Map(spreadLabels(middles, gap, bounds).map((y, index) => [labelled[index], y]));
   return placed
     .map((bracket) => ({ ...bracket, labelY: ys.get(bracket) ?? null }))
     .sort((a, b) => a.under - b.under);

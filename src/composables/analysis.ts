@@ -9,9 +9,9 @@ interface Known {
 /** Chords are never altered, so that one judged once is judged for as long as it is kept. */
 const known = new WeakMap<Chord, Known>();
 
-/** Only what the sound depends on, so that a new title does not judge everything anew. */
-export function settingsKey({ a4Hz, intonation, ensemble, key }: SoundSettings): string {
-  return JSON.stringify([a4Hz, intonation, ensemble, key.tonic]);
+/** Only what a judgement depends on, so that a new title does not judge everything anew. */
+export function settingsKey({ a4Hz, intonation, ensemble, key, limits }: SoundSettings): string {
+  return JSON.stringify([a4Hz, intonation, ensemble, key.tonic, limits ?? null]);
 }
 
 /** @returns how a chord was judged, or `null` where it has not been judged under these settings */

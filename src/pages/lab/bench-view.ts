@@ -4,7 +4,7 @@ import { comfortableReach } from '#shared/study/reach';
 import type { Chord } from '#shared/study/study.document';
 import { reachOf } from '#shared/voicing/reach.sentences';
 import { factsOf } from '#shared/voicing/voice.sentences';
-import { limitText } from '#shared/voicing/limits.sentences';
+import { limitInForce, limitText } from '#shared/voicing/limits.sentences';
 import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { analysisOf } from '@/composables/analysis';
 import { useModelLimits } from '@/composables/model-limits';
@@ -52,13 +52,16 @@ export function useBenchView(
     () => bench.study.a4Hz,
     () => shown.value,
   );
-  const shownLimit = computed(() =>
-    shown.value ? (modelLimit(shown.value.lowerId, shown.value.upperId) ?? null) : null,
-  );
+  const shownLimit = computed(() => {
+    const limit = shown.value ? modelLimit(shown.value.lowerId, shown.value.upperId) : null;
+    return limit ? limitInForce(limit, bench.study.limits) : null;
+  });
   /** @returns the limits of two notes in words; `null` until they are known */
   function limitOf({ lowerId, upperId }: NotePair): string | null {
     const limit = modelLimit(lowerId, upperId);
-    return limit === undefined ? null : limitText(limit ?? undefined, bench.study.key, naming());
+    return limit === undefined
+      ? null
+      : limitText(limit ?? undefined, bench.study.key, naming(), bench.study.limits);
   }
   function show(pair: NotePair | null, move: WeighedMove | null = null): void {
     shown.value = pair;

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { limitText } from '#shared/voicing/limits.sentences';
+import { limitInForce, limitText } from '#shared/voicing/limits.sentences';
 
 const key = { tonic: 'F', mode: 'major' } as const;
 const third = { interval: 'M3', semitones: 4, exact: null } as const;
@@ -16,6 +16,15 @@ describe('the limits of an interval in words', () => {
   it('when one of them has none, then that is said', () => {
     expect(limitText({ ...third, chart: null, model: f2 }, key, 'english')).toContain('Chart: no limit');
     expect(limitText({ ...third, chart: bFlat2, model: null }, key, 'english')).toContain('model finds none');
+  });
+
+  it('when the study has a limit of its own, then it stands in the place of the chart’s', () => {
+    const own = [{ semitones: 4, lowest: 'C3' }];
+    const limit = { ...third, chart: bFlat2, model: f2 };
+    expect(limitText(limit, key, 'english', own)).toContain('Own limits: not below C3.');
+    expect(limitText(limit, key, 'english', [])).toContain('Own limits: no limit for this interval.');
+    expect(limitInForce(limit, own).chart).toBe(48);
+    expect(limitInForce(limit, null).chart).toBe(bFlat2);
   });
 
   it('when the interval is in neither, then that is said', () => {

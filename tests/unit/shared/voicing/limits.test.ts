@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
 import { SCORE_CHORDS } from '#shared/data/score-chords';
 import { midiOfName } from '#shared/pitch/names';
-import { limitFindings, ROOT_ELSEWHERE, rootFinding } from '#shared/voicing/limits';
+import { limitFindings, ROOT_ELSEWHERE, rootBelow, rootFinding } from '#shared/voicing/limits';
 import { analyseChord } from '#shared/voicing/analysis';
 import { modelLimits } from '#shared/voicing/model-limits';
 import type { PlayingSection } from '#shared/voicing/section-pairs';
@@ -76,6 +76,31 @@ describe('the chart of low interval limits', () => {
     expect(rootFinding(notes('C2', 'G2'), 0)).toBeNull();
     expect(rootFinding(notes('E3', 'B3'), 0)).toBeNull();
     expect(rootFinding([], 0)).toBeNull();
+  });
+
+  it('when a root is played elsewhere, then it is taken just below the lowest note, as it is spelt', () => {
+    expect(rootBelow(notes('B2', 'E2'), 'C')).toBe('C2');
+    expect(rootBelow(notes('C3'), 'Bb')).toBe('Bb2');
+    expect(rootBelow(notes('C3'), 'C')).toBe('C3');
+    expect(rootBelow(notes('C3'), null)).toBeNull();
+    expect(rootBelow([], 'C')).toBeNull();
+  });
+
+  it('when a chord is judged, then its own root elsewhere and its study’s own limits are what counts', () => {
+    const chord = chordOf([{ pitch: 'E2' }, { pitch: 'B2' }]);
+    const elsewhere = { ...chord, rootElsewhere: 'C' };
+    expect(analyseChord(chord, EVEN_SETTINGS).limits).toEqual([]);
+    expect(analyseChord(elsewhere, EVEN_SETTINGS)).toMatchObject({
+      rootElsewhere: 'C2',
+      limits: [{ lowerId: ROOT_ELSEWHERE, upperId: 'voice-0', semitonesBelow: 10 }],
+    });
+    const limits = [{ semitones: 7, lowest: 'F2' }];
+    expect(analyseChord(elsewhere, { ...EVEN_SETTINGS, limits }).limits).toMatchObject([
+      { lowerId: 'voice-0', upperId: 'voice-1', interval: 'P5', limit: 'F2', semitonesBelow: 1 },
+    ]);
+    expect(analyseChord(elsewhere, EVEN_SETTINGS).muddiness).toEqual(
+      analyseChord(chord, EVEN_SETTINGS).muddiness,
+    );
   });
 
   it('when a study has limits of its own, then they are the ones that count', () => {

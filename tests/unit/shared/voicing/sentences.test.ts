@@ -4,6 +4,7 @@ import { findingsOf, headlineOf } from '#shared/voicing/sentences';
 import { changeText, factsOf } from '#shared/voicing/voice.sentences';
 import { hertzText, registerName, semitonesText } from '#shared/voicing/words';
 import { reachOf } from '#shared/voicing/reach.sentences';
+import { ROOT_ELSEWHERE } from '#shared/voicing/limits';
 import type { PairShare } from '#shared/voicing/analysis';
 import { analysisOf } from '../../../support/made-up-analyses';
 import { chordOf } from '../../../support/typed-chords';
@@ -27,6 +28,26 @@ const texts = (analysis: ReturnType<typeof analysisOf>) =>
   findingsOf(analysis, 'english').map(({ text }) => text);
 
 describe('what is said of a chord', () => {
+  it('when its root is played elsewhere, then the sentence says so, and of whom', () => {
+    const analysis = {
+      ...analysisOf(chordOf('Va E3 B3'), {
+        limits: [{ ...limit(ROOT_ELSEWHERE, 'note-1', 2), interval: 'M3' }],
+      }),
+      rootElsewhere: 'C3',
+    };
+    expect(findingsOf(analysis, 'english')).toEqual([
+      {
+        lowerId: ROOT_ELSEWHERE,
+        upperId: 'note-1',
+        share: null,
+        semitonesBelow: 2,
+        text:
+          'With the root C played elsewhere, the violas’ E3, a major third above it, stands 2 semitones under ' +
+          'its low limit.',
+      },
+    ]);
+  });
+
   it('when two sections stand under their limit, then both are named, with interval, size and meeting', () => {
     const analysis = analysisOf(chord, {
       registers: { great: { index: 90, at: 40 } },
