@@ -1,7 +1,8 @@
 import { erbRate } from '#shared/hearing/erb';
 import { thresholdInQuiet } from '#shared/hearing/terhardt-1979';
-import type { Decibels } from '#shared/units';
-import type { Partial } from '#shared/voicing/analysis';
+import type { Decibels, Hertz } from '#shared/units';
+import type { VoiceSound } from '#shared/voicing/analysis';
+import { powerOf } from '#shared/voicing/muddiness/joined';
 
 /**
  * Level at the listener of what the partials call 0 dB. A violinist's mf is 84 dB sound power; ten metres away
@@ -11,33 +12,54 @@ import type { Partial } from '#shared/voicing/analysis';
 const LISTENER_LEVEL: Decibels = 60;
 /** A partial so much louder in the same band hides another. */
 export const MASKING: Decibels = 20;
+/** More equivalent rectangular bandwidths than there are up to any frequency that is heard. */
+export const MOST_BANDS = 64;
 
-/** @returns the number of the equivalent rectangular bandwidth in which a partial lies, 0 the lowest */
-export function bandNumber({ frequencyHz }: Pick<Partial, 'frequencyHz'>): number {
-  return Math.floor(erbRate(frequencyHz));
+/** What the ear meets in a chord: its partials, voice after voice, worked out once for all that is asked of them. */
+export interface HeardPartials {
+  /** The first partial of each voice, and behind the last voice the number of all. */
+  readonly starts: readonly number[];
+  readonly frequencies: Float64Array;
+  readonly levels: Float64Array;
+  readonly powers: Float64Array;
+  /** The equivalent rectangular bandwidth in which each lies, 0 the lowest. */
+  readonly bands: Uint8Array;
+  /** 1 where the partial lies above the threshold in quiet where the listener sits. */
+  readonly above: Uint8Array;
 }
 
-/** @returns whether a partial lies above the threshold in quiet where the listener sits */
-export function isAboveThreshold({
-  frequencyHz,
-  levelDb,
-}: Pick<Partial, 'frequencyHz' | 'levelDb'>): boolean {
-  return levelDb + LISTENER_LEVEL > thresholdInQuiet(frequencyHz);
-}
-
-/** @returns the loudest partial of each band */
-export function loudestByBand(partials: readonly Partial[]): ReadonlyMap<number, Decibels> {
-  const loudest = new Map<number, Decibels>();
-  for (const partial of partials) {
-    const band = bandNumber(partial);
-    const known = loudest.get(band);
-    if (known === undefined || partial.levelDb > known) loudest.set(band, partial.levelDb);
+/** @param voices as they sound */
+export function hearPartials(voices: readonly Pick<VoiceSound, 'partials'>[]): HeardPartials {
+  const starts = [0];
+  for (const { partials } of voices) starts.push((starts.at(-1) ?? 0) + partials.length);
+  const count = starts.at(-1) ?? 0;
+  const heard: HeardPartials = {
+    starts,
+    frequencies: new Float64Array(count),
+    levels: new Float64Array(count),
+    powers: new Float64Array(count),
+    bands: new Uint8Array(count),
+    above: new Uint8Array(count),
+  };
+  let place = 0;
+  for (const { partials } of voices) {
+    for (const { frequencyHz, levelDb } of partials) {
+      heard.frequencies[place] = frequencyHz;
+      heard.levels[place] = levelDb;
+      heard.powers[place] = powerOf(levelDb);
+      heard.bands[place] = bandOf(frequencyHz);
+      heard.above[place] = levelDb + LISTENER_LEVEL > thresholdInQuiet(frequencyHz) ? 1 : 0;
+      place += 1;
+    }
   }
-  return loudest;
+  return heard;
 }
 
-/** @returns whether a partial is heard: above the threshold and not masked in its band */
-export function isAudible(partial: Partial, loudest: ReadonlyMap<number, Decibels>): boolean {
-  const masker = loudest.get(bandNumber(partial)) ?? -Infinity;
-  return isAboveThreshold(partial) && masker - partial.levelDb < MASKING;
+function bandOf(frequencyHz: Hertz): number {
+  return Math.min(Math.floor(erbRate(frequencyHz)), MOST_BANDS - 1);
+}
+
+/** @returns whether a partial is heard beside the loudest that could mask it in its band */
+export function isHeard({ levels, above }: HeardPartials, place: number, masker: Decibels): boolean {
+  return above[place] === 1 && masker - (levels[place] ?? 0) < MASKING;
 }

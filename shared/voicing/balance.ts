@@ -1,7 +1,7 @@
 import type { Decibels } from '#shared/units';
 import type { VoiceSound } from '#shared/voicing/analysis';
-import { bandNumber, isAboveThreshold, MASKING } from '#shared/voicing/audibility';
-import { powerOf } from '#shared/voicing/muddiness/joined';
+import type { HeardPartials } from '#shared/voicing/audibility';
+import { hearPartials, isHeard, MOST_BANDS } from '#shared/voicing/audibility';
 
 /** How much of a voice is heard. */
 export interface VoiceBalance {
@@ -37,83 +37,90 @@ const DB_PER_POWER_DECADE = 10;
 /**
  * Who is covered, and which tone of the chord is thin or swollen.
  * @param voices as they sound
+ * @param heard the same voices' partials, where they are at hand
  * @returns voices in the order given; tones in the order of their first voice
  */
-export function balanceOf(voices: readonly VoiceSound[]): ChordBalance {
-  return { voices: voiceBalances(voices), tones: toneBalances(voices) };
+export function balanceOf(
+  voices: readonly VoiceSound[],
+  heard: HeardPartials = hearPartials(voices),
+): ChordBalance {
+  const powers = voices.map((_, voice) => powerOfVoice(heard, voice));
+  return { voices: voiceBalances(voices, heard, powers), tones: toneBalances(voices, powers) };
 }
 
-/** The two loudest voices of each band: what masks a voice is the loudest other. */
-interface Loudest {
-  readonly voice: number;
-  readonly first: Decibels;
-  readonly second: Decibels;
+/** The loudest partial of each band, who plays it, and the loudest of anybody else: what masks a voice. */
+interface Maskers {
+  readonly voice: Int32Array;
+  readonly first: Float64Array;
+  readonly others: Float64Array;
 }
 
-function voiceBalances(voices: readonly VoiceSound[]): readonly VoiceBalance[] {
-  const bands = loudestOthers(voices);
-  return voices.map(({ id, partials }, index) => {
-    let whole = 0;
-    let heard = 0;
-    for (const partial of partials) {
-      const power = powerOf(partial.levelDb);
-      whole += power;
-      const loudest = bands.get(bandNumber(partial));
-      const masker = loudest?.voice === index ? loudest.second : (loudest?.first ?? -Infinity);
-      if (isAboveThreshold(partial) && masker - partial.levelDb < MASKING) heard += power;
+function voiceBalances(
+  voices: readonly VoiceSound[],
+  heard: HeardPartials,
+  powers: readonly number[],
+): readonly VoiceBalance[] {
+  const maskers = maskersOf(heard);
+  return voices.map(({ id }, voice) => {
+    let sum = 0;
+    const end = heard.starts[voice + 1] ?? 0;
+    for (let place = heard.starts[voice] ?? 0; place < end; place += 1) {
+      const band = heard.bands[place] ?? 0;
+      const masker = (maskers.voice[band] === voice ? maskers.others : maskers.first)[band] ?? -Infinity;
+      if (isHeard(heard, place, masker)) sum += heard.powers[place] ?? 0;
     }
-    const share = whole === 0 ? 0 : heard / whole;
+    const whole = powers[voice] ?? 0;
+    const share = whole === 0 ? 0 : sum / whole;
     return { id, heard: share, covered: share < COVERED };
   });
 }
 
-function loudestOthers(voices: readonly VoiceSound[]): ReadonlyMap<number, Loudest> {
-  const bands = new Map<number, Loudest>();
-  voices.forEach(({ partials }, voice) => {
-    for (const partial of partials) {
-      const band = bandNumber(partial);
-      bands.set(band, louder(bands.get(band), voice, partial.levelDb));
+function maskersOf({ starts, bands, levels }: HeardPartials): Maskers {
+  const voice = new Int32Array(MOST_BANDS).fill(-1);
+  const first = new Float64Array(MOST_BANDS).fill(-Infinity);
+  const others = new Float64Array(MOST_BANDS).fill(-Infinity);
+  for (let now = 0; now + 1 < starts.length; now += 1) {
+    for (let place = starts[now] ?? 0; place < (starts[now + 1] ?? 0); place += 1) {
+      const band = bands[place] ?? 0;
+      const level = levels[place] ?? -Infinity;
+      const most = first[band] ?? -Infinity;
+      if (voice[band] === now) first[band] = Math.max(most, level);
+      else if (level > most) {
+        others[band] = most;
+        first[band] = level;
+        voice[band] = now;
+      } else others[band] = Math.max(others[band] ?? -Infinity, level);
     }
-  });
-  return bands;
-}
-
-function louder(known: Loudest | undefined, voice: number, levelDb: Decibels): Loudest {
-  if (!known) return { voice, first: levelDb, second: -Infinity };
-  if (voice === known.voice) return { ...known, first: Math.max(known.first, levelDb) };
-  if (levelDb > known.first) return { voice, first: levelDb, second: known.first };
-  return { ...known, second: Math.max(known.second, levelDb) };
-}
-
-function toneBalances(voices: readonly VoiceSound[]): readonly ToneBalance[] {
-  const groups = new Map<string, VoiceSound[]>();
-  for (const voice of voices) {
-    const tone = voice.pitch.replace(/-?\d+$/, '');
-    groups.set(tone, [...(groups.get(tone) ?? []), voice]);
   }
-  const powers = [...groups.values()].map((group) =>
-    group.reduce((sum, voice) => sum + soundPower(voice), 0),
-  );
+  return { voice, first, others };
+}
+
+function powerOfVoice({ starts, powers }: HeardPartials, voice: number): number {
+  let sum = 0;
+  for (let place = starts[voice] ?? 0; place < (starts[voice + 1] ?? 0); place += 1)
+    sum += powers[place] ?? 0;
+  return sum;
+}
+
+function toneBalances(voices: readonly VoiceSound[], powers: readonly number[]): readonly ToneBalance[] {
+  const tones = new Map<string, { readonly ids: string[]; players: number; power: number }>();
+  voices.forEach(({ id, pitch, players }, i) => {
+    const name = pitch.replace(/-?\d+$/, '');
+    const tone = tones.get(name) ?? { ids: [], players: 0, power: 0 };
+    tone.ids.push(id);
+    tone.players += players;
+    tone.power += powers[i] ?? 0;
+    tones.set(name, tone);
+  });
   const whole = powers.reduce((sum, power) => sum + power, 0);
-  return [...groups].map(([tone, group], i) => {
-    const power = powers[i] ?? 0;
-    const others = (whole - power) / (powers.length - 1);
-    const levelDb = powers.length > 1 ? DB_PER_POWER_DECADE * Math.log10(power / others) : null;
-    return {
-      tone,
-      ids: group.map(({ id }) => id),
-      players: group.reduce((sum, { players }) => sum + players, 0),
-      levelDb,
-      standing: standingOf(levelDb ?? 0),
-    };
+  return [...tones].map(([tone, { ids, players, power }]) => {
+    const others = (whole - power) / (tones.size - 1);
+    const levelDb = tones.size > 1 ? DB_PER_POWER_DECADE * Math.log10(power / others) : null;
+    return { tone, ids, players, levelDb, standing: standingOf(levelDb ?? 0) };
   });
 }
 
 function standingOf(levelDb: Decibels): ToneBalance['standing'] {
   if (levelDb <= THIN) return 'thin';
   return levelDb >= SWOLLEN ? 'swollen' : 'even';
-}
-
-function soundPower({ partials }: VoiceSound): number {
-  return partials.reduce((sum, { levelDb }) => sum + powerOf(levelDb), 0);
 }

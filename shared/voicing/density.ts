@@ -1,10 +1,10 @@
 import { midiOfFrequency } from '#shared/pitch/tuning';
 import type { Decibels, Hertz } from '#shared/units';
-import type { Partial, VoiceSound } from '#shared/voicing/analysis';
-import { bandNumber, isAudible, loudestByBand } from '#shared/voicing/audibility';
-import { powerOf } from '#shared/voicing/muddiness/joined';
+import type { VoiceSound } from '#shared/voicing/analysis';
+import type { HeardPartials } from '#shared/voicing/audibility';
+import { hearPartials, isHeard, MOST_BANDS } from '#shared/voicing/audibility';
 import type { Register } from '#shared/voicing/registers';
-import { registerOf, REGISTERS } from '#shared/voicing/registers';
+import { registerNumber, REGISTERS } from '#shared/voicing/registers';
 
 /** How much is heard in one band or register. */
 export interface DensityFigure {
@@ -32,39 +32,61 @@ export interface ChordDensity {
 
 const DB_PER_POWER_DECADE = 10;
 
+/** Counts and energies by band or register, gathered partial by partial. */
+interface Gathered {
+  readonly counts: Uint32Array;
+  readonly powers: Float64Array;
+}
+
 /**
  * How densely a chord fills the bands of hearing and the registers: audible partials and their energy. Audible is
  * what lies above the threshold in quiet and is not masked by a partial 20 dB louder in the same band.
  * @param voices as they sound
  * @param a4Hz places partials in registers
+ * @param heard the same voices' partials, where they are at hand
  */
-export function densityOfChord(voices: readonly Pick<VoiceSound, 'partials'>[], a4Hz: Hertz): ChordDensity {
-  const partials = voices.flatMap((voice) => voice.partials);
-  const loudest = loudestByBand(partials);
-  const audible = partials.filter((partial) => isAudible(partial, loudest));
-  const byBand = groupBy(audible, bandNumber);
-  const byRegister = groupBy(audible, ({ frequencyHz }) => registerOf(midiOfFrequency(frequencyHz, a4Hz)));
-  return {
-    bands: [...byBand].sort(([a], [b]) => a - b).map(([band, group]) => ({ band, ...figureOf(group) })),
-    registers: REGISTERS.map((register) => ({ register, ...figureOf(byRegister.get(register) ?? []) })),
-  };
-}
-
-function figureOf(partials: readonly Partial[]): DensityFigure {
-  const power = partials.reduce((sum, { levelDb }) => sum + powerOf(levelDb), 0);
-  return { partials: partials.length, levelDb: power > 0 ? DB_PER_POWER_DECADE * Math.log10(power) : null };
-}
-
-function groupBy<K>(
-  partials: readonly Partial[],
-  keyOf: (partial: Partial) => K,
-): ReadonlyMap<K, readonly Partial[]> {
-  const groups = new Map<K, Partial[]>();
-  for (const partial of partials) {
-    const key = keyOf(partial);
-    const group = groups.get(key);
-    if (group) group.push(partial);
-    else groups.set(key, [partial]);
+export function densityOfChord(
+  voices: readonly Pick<VoiceSound, 'partials'>[],
+  a4Hz: Hertz,
+  heard: HeardPartials = hearPartials(voices),
+): ChordDensity {
+  const loudest = loudestByBand(heard);
+  const byBand = gathered(MOST_BANDS);
+  const byRegister = gathered(REGISTERS.length);
+  for (let place = 0; place < heard.levels.length; place += 1) {
+    const band = heard.bands[place] ?? 0;
+    if (!isHeard(heard, place, loudest[band] ?? -Infinity)) continue;
+    const power = heard.powers[place] ?? 0;
+    gather(byBand, band, power);
+    gather(byRegister, registerNumber(midiOfFrequency(heard.frequencies[place] ?? 0, a4Hz)), power);
   }
-  return groups;
+  const bands: BandDensity[] = [];
+  byBand.counts.forEach((count, band) => {
+    if (count > 0) bands.push({ band, ...figureOf(byBand, band) });
+  });
+  return { bands, registers: REGISTERS.map((register, i) => ({ register, ...figureOf(byRegister, i) })) };
+}
+
+/** The level of the loudest partial of each band. */
+function loudestByBand({ bands, levels }: HeardPartials): Float64Array {
+  const loudest = new Float64Array(MOST_BANDS).fill(-Infinity);
+  for (let place = 0; place < levels.length; place += 1) {
+    const band = bands[place] ?? 0;
+    loudest[band] = Math.max(loudest[band] ?? -Infinity, levels[place] ?? -Infinity);
+  }
+  return loudest;
+}
+
+function gathered(size: number): Gathered {
+  return { counts: new Uint32Array(size), powers: new Float64Array(size) };
+}
+
+function gather({ counts, powers }: Gathered, into: number, power: number): void {
+  counts[into] = (counts[into] ?? 0) + 1;
+  powers[into] = (powers[into] ?? 0) + power;
+}
+
+function figureOf({ counts, powers }: Gathered, of: number): DensityFigure {
+  const power = powers[of] ?? 0;
+  return { partials: counts[of] ?? 0, levelDb: power > 0 ? DB_PER_POWER_DECADE * Math.log10(power) : null };
 }

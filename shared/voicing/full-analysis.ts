@@ -1,6 +1,7 @@
 import type { Chord } from '#shared/study/study.document';
 import type { ChordAnalysis, SoundSettings } from '#shared/voicing/analysis';
 import { analyseChord } from '#shared/voicing/analysis';
+import { hearPartials } from '#shared/voicing/audibility';
 import type { ChordBalance } from '#shared/voicing/balance';
 import { balanceOf } from '#shared/voicing/balance';
 import type { ChordCharacter } from '#shared/voicing/character';
@@ -26,10 +27,11 @@ export interface FullAnalysis extends ChordAnalysis {
  */
 export function fullAnalysis(chord: Chord, settings: SoundSettings): FullAnalysis {
   const analysis = analyseChord(chord, settings);
+  const heard = hearPartials(analysis.voices);
   return {
     ...analysis,
-    density: densityOfChord(analysis.voices, settings.a4Hz),
-    balance: balanceOf(analysis.voices),
+    density: densityOfChord(analysis.voices, settings.a4Hz, heard),
+    balance: balanceOf(analysis.voices, heard),
     character: characterOf(analysis.voices, settings.a4Hz),
     moves: helpfulMoves(chord, settings, analysis),
   };

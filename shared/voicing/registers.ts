@@ -35,6 +35,11 @@ export const REGISTER_BOUNDS: readonly RegisterBounds[] = REGISTERS.map((registe
 
 /** @returns the register in which a pitch lies; below C0 and above E8 the nearest one. */
 export function registerOf(midi: Midi): Register {
+  return REGISTERS[registerNumber(midi)] ?? 'subcontra';
+}
+
+/** @returns the same as its place among the registers, 0 the lowest */
+export function registerNumber(midi: Midi): number {
   const index = Math.floor((midi - C0 + QUARTER_TONE) / 12);
-  return REGISTERS[Math.min(Math.max(index, 0), REGISTERS.length - 1)] ?? 'subcontra';
+  return Math.min(Math.max(index, 0), REGISTERS.length - 1);
 }
