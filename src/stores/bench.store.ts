@@ -12,6 +12,7 @@ import type { Chord } from '#shared/study/study.document';
 import { useBenchDocument } from '@/stores/bench-document';
 import { useDraftKeeping } from '@/stores/draft-keeping';
 import { newId } from '@/stores/ids';
+import { useVoiceSelection } from '@/stores/voice-selection';
 
 /** The document on the bench and what of it is selected. */
 export const useBenchStore = defineStore('bench', () => {
@@ -19,29 +20,23 @@ export const useBenchStore = defineStore('bench', () => {
   const { study, change } = bench;
   /** What was selected last; undo may have taken it away. */
   const wantedChordId = ref<string | null>(null);
-  const wantedVoiceId = ref<string | null>(null);
 
   const chord = computed(
     () => study.value.chords.find(({ id }) => id === wantedChordId.value) ?? study.value.chords[0],
   );
   const chordId = computed(() => chord.value?.id ?? '');
-  const voice = computed(() => chord.value?.voices.find(({ id }) => id === wantedVoiceId.value) ?? null);
-  const voiceId = computed(() => voice.value?.id ?? null);
+  const voices = useVoiceSelection(chord);
   const isEmpty = computed(() => isEmptyStudy(study.value));
 
   function changeCurrentChord(alter: (chord: Chord) => Chord): void {
     change(changeChord(study.value, chordId.value, alter));
   }
 
-  function selectVoice(id: string | null): void {
-    wantedVoiceId.value = id;
-  }
-
   function selectChord(id: string): void {
     if (id === chordId.value) return;
     bench.endGesture();
     wantedChordId.value = id;
-    wantedVoiceId.value = null;
+    voices.selectVoice(null);
   }
 
   /** Puts a chord like the current one after it and goes there. */
@@ -63,12 +58,12 @@ export const useBenchStore = defineStore('bench', () => {
   /** Opens another document: its history begins here and counts as saved. */
   function replaceDocument(document: DraftDocument): void {
     wantedChordId.value = null;
-    wantedVoiceId.value = null;
+    voices.selectVoice(null);
     open(document);
   }
 
   const draft = useDraftKeeping(study, bench.revision, replaceDocument);
-  const selection = { chord, chordId, voice, voiceId, isEmpty, selectChord, selectVoice };
+  const selection = { chord, chordId, isEmpty, selectChord, ...voices };
   const changes = { changeCurrentChord, duplicateChord, removeCurrentChord, replaceDocument };
   return { ...bench, ...selection, ...changes, ...draft };
 });
