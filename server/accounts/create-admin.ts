@@ -1,10 +1,9 @@
 import { CannotCreate, createAdministrator } from '#server/accounts/administrators.service';
 import { createPasswords } from '#server/accounts/passwords';
 import { randomSecret } from '#server/accounts/secrets';
-import { readSettings, SettingsError } from '#server/env';
-import { describeError } from '#server/http/describe-error';
+import { readSettings } from '#server/env';
 import { withDatabase } from '#server/setup/command';
-import { CannotStart } from '#server/setup/data-folder';
+import { runCommand } from '#server/setup/run-command';
 
 const USAGE = `npm run admin:create -- somebody@example "Their Name"
 Takes the same settings as the program. The password is ADMIN_PASSWORD, or is made and shown once.`;
@@ -29,12 +28,4 @@ if (email === undefined || name === undefined) {
   console.error(USAGE);
   process.exit(1);
 }
-try {
-  await run(email, name);
-  process.exit(0);
-} catch (error) {
-  const forOperators =
-    error instanceof SettingsError || error instanceof CannotStart || error instanceof CannotCreate;
-  console.error(forOperators ? error.message : describeError(error));
-  process.exit(1);
-}
+await runCommand(() => run(email, name), [CannotCreate]);

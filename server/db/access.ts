@@ -41,9 +41,14 @@ export function readDatabaseUrl(text: string): DatabaseAccess {
   };
 }
 
+/** @returns whether a host is this machine. */
+export function isLoopback(host: string): boolean {
+  return LOOPBACK.has(host);
+}
+
 /** What the driver needs. Another machine is reached with verified TLS only. */
 export function connectionOptions(access: DatabaseAccess): PoolOptions {
-  const elsewhere = access.host !== undefined && !LOOPBACK.has(access.host);
+  const elsewhere = access.host !== undefined && !isLoopback(access.host);
   return {
     ...access,
     timezone: 'Z',

@@ -1,5 +1,5 @@
 /**
- * Makes a machine that has only Node.js ready: `node server/setup/bootstrap.mjs start|dev|build|test`.
+ * Makes a machine that has only Node.js ready: `node server/setup/bootstrap.mjs start|dev|build|backup|test`.
  * Written plainly at the top, so that an old Node.js gets as far as the sentence about its age.
  */
 const MINIMUM = [20, 19];

@@ -8,6 +8,11 @@ export const MARIADB = {
   program: 'mariadbd',
   packages: ['mariadb-server-core', 'mariadb-client-core'],
 };
+export const DUMP = {
+  what: 'the program for backups',
+  program: 'mariadb-dump',
+  packages: ['mariadb-client'],
+};
 export const CHROMIUM = { what: 'the browser for the tests', program: 'chromium', packages: ['chromium'] };
 
 /** Others may be installing too. */

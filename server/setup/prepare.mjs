@@ -1,7 +1,7 @@
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { isBuilt, makeBuild } from './build.mjs';
-import { CHROMIUM, installPackages, isInstalled, MARIADB } from './debian.mjs';
+import { CHROMIUM, DUMP, installPackages, isInstalled, MARIADB } from './debian.mjs';
 import { dependenciesAreComplete, installDependencies } from './dependencies.mjs';
 import { withLock } from './process-lock.mjs';
 import { CannotSetUp, say } from './report.mjs';
@@ -18,7 +18,8 @@ const STEPS = {
   start: () => [dependencies, ...ownDatabase(), build],
   dev: () => [dependencies, ...ownDatabase()],
   build: () => [dependencies, build],
-  test: () => [dependencies, program(MARIADB), program(CHROMIUM), build],
+  backup: () => [dependencies, program(MARIADB), program(DUMP)],
+  test: () => [dependencies, program(MARIADB), program(DUMP), program(CHROMIUM), build],
 };
 
 /** Does what is missing, and nothing twice at once. @returns the exit code. */

@@ -4,8 +4,16 @@ import { delimiter, join } from 'node:path';
 /** Debian keeps servers where an ordinary user's PATH does not look. */
 const FOLDERS = [...(process.env.PATH ?? '').split(delimiter), '/usr/sbin', '/usr/local/sbin'];
 
+/** Debian's packages of the programs that are used. */
+const PACKAGES = {
+  mariadbd: 'mariadb-server-core',
+  'mariadb-install-db': 'mariadb-server-core',
+  mariadb: 'mariadb-client-core',
+  'mariadb-dump': 'mariadb-client',
+} as const;
+
 /** @throws {Error} if the machine has no such program. */
-export function findProgram(name: 'mariadbd' | 'mariadb-install-db'): string {
+export function findProgram(name: keyof typeof PACKAGES): string {
   for (const folder of FOLDERS) {
     const file = join(folder, name);
     try {
@@ -15,7 +23,7 @@ export function findProgram(name: 'mariadbd' | 'mariadb-install-db'): string {
       continue;
     }
   }
-  throw new Error(`${name} is not on this machine: install mariadb-server-core and mariadb-client-core.`);
+  throw new Error(`${name} is not on this machine: install ${PACKAGES[name]}.`);
 }
 
 /** MariaDB wants to be told that it may run as root. */
