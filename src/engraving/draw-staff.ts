@@ -77,9 +77,9 @@ const DURATIONS: Readonly<Record<NoteSign, string>> = {
   32: '32',
   64: '64',
 };
-const TOUCHED_HEADS: Readonly<Record<NoteSign, string>> = {
-  ...{ breve: 'D0', 1: 'D0', 2: 'D1', 4: 'D2', 8: 'D2', 16: 'D2', 32: 'D2', 64: 'D2' },
-};
+/** A touched head is open, however short the note. */
+const TOUCHED_WHOLE = 'D0';
+const TOUCHED_STEMMED = 'D1';
 const SIGNS = new Map([
   [-2, 'bb'],
   [-1, 'b'],
@@ -102,7 +102,7 @@ const INK = { fillStyle: 'currentColor', strokeStyle: 'currentColor' };
 
 function keyOf({ pitch, head }: StaffNote, value: NoteValue): string {
   const key = `${pitch.letter.toLowerCase()}/${pitch.octave}`;
-  return head === 'touched' ? `${key}/${TOUCHED_HEADS[value.sign]}` : key;
+  return head === 'touched' ? `${key}/${hasStem(value) ? TOUCHED_STEMMED : TOUCHED_WHOLE}` : key;
 }
 
 function restOf(engraver: Engraver, value: NoteValue): StaveNote {
@@ -164,7 +164,7 @@ function drawOver(event: StaffEvent, note: StaveNote, text: StaffText): readonly
     y += OCTAVE_SIGN_ROOM;
   }
   for (const { circled } of chord?.notes ?? []) {
-    if (!circled) continue;
+    if (!circled || event.tiedFrom) continue;
     drawn.push(drawCircle(middle, y + CIRCLE_ROOM / 2));
     y += CIRCLE_ROOM;
   }

@@ -2,8 +2,9 @@ import musicFontUrl from '@vexflow-fonts/sebastian/sebastian.woff2?url';
 
 /** Sebastian (SIL Open Font License 1.1): the notation's signs. */
 export const MUSIC_FONT = 'Sebastian';
-/** Words beside the notes; what Plex lacks (♭ ♮ ♯) the music font has. */
-export const TEXT_FONTS = `'IBM Plex Sans', '${MUSIC_FONT}', sans-serif`;
+/** What Plex lacks: ♭ ♮ ♯; the page has the same under this name. */
+export const ACCIDENTALS_FONT = 'Siltline Accidentals';
+export const TEXT_FONTS = `'IBM Plex Sans', '${ACCIDENTALS_FONT}', sans-serif`;
 
 export { musicFontUrl };
 

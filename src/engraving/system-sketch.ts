@@ -89,7 +89,7 @@ export function systemSketch(plan: SystemPlan, room: SystemRoom): SystemSketch {
     return staffPlaces(extents, room.height, largest);
   };
   // Words keep their size on the screen, so that in smaller staves they take more of the staff's own room.
-  const { scale, tops } = placesAt(placesAt(largest).scale);
+  const { scale, tops, height } = placesAt(placesAt(largest).scale);
   const width = room.width / scale;
   const text: StaffText = { size: room.textSize / scale, anchor: 'end' };
   const staves = plan.staves.map((staff) => ({
@@ -104,5 +104,5 @@ export function systemSketch(plan: SystemPlan, room: SystemRoom): SystemSketch {
     },
     events: withWords(eventsOf(staff, plan.values, width), staff),
   }));
-  return { scale, tops, staves };
+  return { scale, tops, height, staves };
 }
