@@ -9,6 +9,7 @@ import { MAX_VOICES, type Chord, type Voice } from '#shared/study/study.document
 import { applyTyped } from '#shared/study/typed.changes';
 import type { TypedVoice } from '#shared/study/typing-line';
 import { addVoice, changeSection, moveVoice, removeVoice, setVoice } from '#shared/study/voices.changes';
+import type { ChordSettings } from '@/components/progression/ChordMenu.vue';
 import { notice } from '@/composables/notices';
 import type { useBenchStore } from '@/stores/bench.store';
 import { newId } from '@/stores/ids';
@@ -92,7 +93,7 @@ export function useTypingActions(bench: Bench) {
 
 /** What is done to chords as wholes. */
 export function useChordActions(bench: Bench) {
-  function set(settings: Partial<Pick<Chord, 'name' | 'beats' | 'dynamic'>>): void {
+  function set(settings: ChordSettings): void {
     bench.changeCurrentChord((chord) => ({ ...chord, ...settings }));
   }
 
