@@ -18,5 +18,16 @@ export const PASSING_CHORDS: readonly string[] = [
   'F2 A2 C3 F3 A3',
   'G2 B2 D3 G3 D4',
 ];
+/** Fifths at the bottom, none under its limit: as double basses and cellos play them. */
+export const LOW_FIFTHS: readonly string[] = ['C2 G2', 'D2 A2', 'Eb2 Bb2', 'F2 C3', 'G2 D3', 'A2 E3'];
+/** Basses doubled at the octave by the cellos, open above. */
+export const OCTAVES_BELOW: readonly string[] = [
+  'C2 C3',
+  'D2 D3 A3',
+  'C2 C3 G3 E4 C5',
+  'G1 G2 D3',
+  'D2 D3 A3 F4 D5',
+  'E1 E2 B2',
+];
 export const CLEAR_TRIAD = 'C4 E4 G4';
 export const MIDDLE_TRIAD = 'C3 E3 G3';

@@ -1,3 +1,4 @@
+import type { DealtChords } from '#shared/voicing/calibration/dealt-chords';
 import type { Judgement } from '#shared/voicing/calibration/judgement';
 import { mean } from '#shared/voicing/calibration/statistics';
 import { limitCost } from '#shared/voicing/calibration/threshold';
@@ -12,6 +13,7 @@ export interface CostParts {
   readonly orderings: number;
   readonly ratings: number;
   readonly chords: number;
+  readonly dealt: number;
   readonly steadiness: number;
 }
 
@@ -30,6 +32,9 @@ const OPEN_CHORD_MEAN = 42;
 /** Close low chords must score over 75, chords that pass a limit 55 or more. */
 const CLOSE_CHORD_BOTTOM = 80;
 const PASSING_CHORD_BOTTOM = 60;
+/** Dealt with the basses, open chords and fifths must score 50 or so, octaves less. */
+const DEALT_OPEN_TOP = 48.5;
+const DEALT_OCTAVE_TOP = 45;
 /** The triads must lie over 0 and under 25, and between 25 and 60. */
 const CLEAR_TRIAD_TOP = 20;
 const CLEAR_TRIAD_BOTTOM = 0.5;
@@ -65,6 +70,7 @@ export function costParts(judgement: Judgement): CostParts {
     orderings: ORDERING_WEIGHT * excess(judgement.orderings.map((margin) => ORDERING_MARGIN - margin)),
     ratings: CORRELATION_WEIGHT * excess([(judgement.correlation - CORRELATION) / CORRELATION_UNIT]),
     chords: CHORD_WEIGHT * excess(chords.map((points) => points / INDEX_UNIT)),
+    dealt: CHORD_WEIGHT * excess(dealtPoints(judgement.dealt).map((points) => points / INDEX_UNIT)),
     steadiness:
       STEADINESS_WEIGHT *
       excess([
@@ -72,6 +78,17 @@ export function costParts(judgement: Judgement): CostParts {
         (judgement.largestRipple - RIPPLE) / RIPPLE_UNIT,
       ]),
   };
+}
+
+/** By how many points each chord dealt as an orchestra deals it passes its bound. */
+function dealtPoints({ fifths, octaves, open, score, close, passing }: DealtChords): readonly number[] {
+  return [
+    ...[...fifths, ...open].map((index) => index - DEALT_OPEN_TOP),
+    ...octaves.map((index) => index - DEALT_OCTAVE_TOP),
+    ...score.map((index) => index - SCORE_CHORD_TOP),
+    ...close.map((index) => CLOSE_CHORD_BOTTOM - index),
+    ...passing.map((index) => PASSING_CHORD_BOTTOM - index),
+  ];
 }
 
 /** @returns the whole cost */

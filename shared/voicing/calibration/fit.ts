@@ -18,22 +18,22 @@ export const FITTED = [
 export type Fitted = (typeof FITTED)[number];
 
 /**
- * Where the fit begins: round figures near the best of a wide search by chance. Sharpness, pooling and reach are the form's and stay: a square root of
- * the curve fits the chart best of the powers tried, 1.5 lets the cloudiest pairs govern without hiding the
- * others, and at 3.5 bandwidths the curve has died away.
+ * Where the fit begins: round figures near the best of a wide search by chance. Sharpness, pooling and reach are the
+ * form's and stay: a square root of the curve fits the chart best of the powers tried, a root of squares lets the
+ * cloudiest pairs govern without hiding the others, and at 3.5 bandwidths the curve has died away.
  */
 export const START: Untuned = {
-  peakErb: 0.18,
+  peakErb: 0.25,
   sharpness: 0.5,
   reachErb: 3.5,
-  fusionErb: 0.057,
-  fusionStrength: 9,
-  pooling: 1.5,
-  floor: 0.15,
-  cornerHz: 115,
-  slope: 4,
-  windowSemitones: 2.75,
-  localWindowSemitones: 3.4,
+  fusionErb: 0.015,
+  fusionStrength: 12,
+  pooling: 2,
+  floor: 0.025,
+  cornerHz: 105,
+  slope: 2.7,
+  windowSemitones: 2.25,
+  localWindowSemitones: 6.8,
 };
 
 /** How far the fit goes. */

@@ -12,6 +12,8 @@ import { MUDDY_REGISTERS, REGISTER_RATINGS } from '#shared/data/register-ratings
 import { SCORE_CHORDS } from '#shared/data/score-chords';
 import type { Midi } from '#shared/units';
 import { correlation } from '#shared/voicing/calibration/statistics';
+import type { DealtChords } from '#shared/voicing/calibration/dealt-chords';
+import { judgeDealt } from '#shared/voicing/calibration/dealt-chords';
 import { limitCurves } from '#shared/voicing/calibration/limit-curves';
 import type { LimitFit } from '#shared/voicing/calibration/threshold';
 import { fitThreshold } from '#shared/voicing/calibration/threshold';
@@ -39,6 +41,8 @@ export interface Judgement {
   readonly openChords: readonly number[];
   readonly closeChords: readonly number[];
   readonly passingChords: readonly number[];
+  /** Chords dealt as an orchestra deals them, with the players of the usual ensemble. */
+  readonly dealt: DealtChords;
   readonly clearTriad: number;
   readonly middleTriad: number;
   /** By how much the middle triad moves from the softest dynamic to the loudest. */
@@ -85,6 +89,7 @@ export function judge(untuned: Untuned, chart: readonly LowIntervalLimit[] = LOW
     openChords: OPEN_CHORDS.map((chord) => index(namedVoicing(chord))),
     closeChords: CLOSE_LOW_CHORDS.map((chord) => index(namedVoicing(chord))),
     passingChords: PASSING_CHORDS.map((chord) => index(namedVoicing(chord))),
+    dealt: judgeDealt(index),
     clearTriad: index(namedVoicing(CLEAR_TRIAD)),
     middleTriad: index(namedVoicing(MIDDLE_TRIAD)),
     dynamicsMove: Math.abs(

@@ -1,6 +1,7 @@
 import { MUDDY_REGISTERS, REGISTER_RATINGS } from '#shared/data/register-ratings';
 import type { CostParts } from '#shared/voicing/calibration/cost';
 import { costParts } from '#shared/voicing/calibration/cost';
+import type { DealtChords } from '#shared/voicing/calibration/dealt-chords';
 import type { Judgement } from '#shared/voicing/calibration/judgement';
 import { correlationInterval, mean } from '#shared/voicing/calibration/statistics';
 import type { LeaveOneOut } from '#shared/voicing/calibration/uncertainty';
@@ -52,14 +53,30 @@ function summaryLines({ limits, correlation, constants }: Judgement, left: Leave
   ];
 }
 
+function list(values: readonly number[]): string {
+  return values.map((value) => value.toFixed(0)).join(' ');
+}
+
+function dealtLines({ fifths, octaves, open, score, close, passing }: DealtChords): readonly string[] {
+  return [
+    'dealt from the bottom with the basses:',
+    `  fifths                 ${list(fifths)}`,
+    `  octaves                ${list(octaves)}`,
+    `  open chords            ${list(open)}`,
+    `  score chords           ${list(score)}`,
+    `  close low chords       ${list(close)}`,
+    `  passing a limit        ${list(passing)}`,
+  ];
+}
+
 function chordLines(judgement: Judgement): readonly string[] {
-  const list = (values: readonly number[]) => values.map((value) => value.toFixed(0)).join(' ');
   return [
     `orderings, least margin  ${Math.min(...judgement.orderings).toFixed(DIGITS)} (1 is what must hold)`,
     `score chords             ${list(judgement.scoreChords)}`,
     `open chords              ${list(judgement.openChords)}, mean ${mean(judgement.openChords).toFixed(0)}`,
     `close low chords         ${list(judgement.closeChords)}`,
     `chords passing a limit   ${list(judgement.passingChords)}`,
+    ...dealtLines(judgement.dealt),
     `C4 E4 G4, C3 E3 G3       ${judgement.clearTriad.toFixed(DIGITS)}, ${judgement.middleTriad.toFixed(DIGITS)}`,
     `from ppp to fff          ${judgement.dynamicsMove.toFixed(DIGITS)} points`,
     `octave lower, clearer    ${(judgement.largestRipple * PERCENT).toFixed(DIGITS)} % at most`,

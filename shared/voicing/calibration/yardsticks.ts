@@ -6,6 +6,8 @@ import { SECTION_FACTS } from '#shared/strings/sections';
 import type { Dynamic, Ensemble, Technique } from '#shared/study/study.document';
 import { DEFAULT_ENSEMBLE } from '#shared/study/study.document';
 import type { Hertz, Midi } from '#shared/units';
+import { dealToSections } from '#shared/study/dealing';
+import { comfortableReach } from '#shared/study/reach';
 import { nominalLevel } from '#shared/acoustics/level';
 import type { Joinable } from '#shared/voicing/muddiness/joined';
 import { joinUnisons } from '#shared/voicing/muddiness/joined';
@@ -71,13 +73,33 @@ export function scoreVoicing(
   ensemble: Ensemble = DEFAULT_ENSEMBLE,
 ): readonly MuddinessVoice[] {
   const notes = chord.parts.flatMap(([section, pitches]) =>
-    pitches.map((pitch) =>
-      noteOf(
-        SECTION_FACTS[section].instrument,
-        midiOfName(pitch),
-        ensemble.players[section] / pitches.length,
-      ),
-    ),
+    pitches.map((pitch) => sharedNote(section, midiOfName(pitch), pitches.length, ensemble)),
   );
   return joinUnisons(notes, CALIBRATION_A4);
+}
+
+/**
+ * A voicing dealt as an orchestra deals it, from the bottom with the basses; notes of one section share its
+ * players.
+ * @param midi rising
+ */
+export function dealtVoicing(
+  midi: readonly Midi[],
+  ensemble: Ensemble = DEFAULT_ENSEMBLE,
+): readonly MuddinessVoice[] {
+  const sections = dealToSections(
+    midi.map((note) => [note]),
+    comfortableReach(ensemble.bass),
+  );
+  const notes = midi.flatMap((note, i) => {
+    const section = sections[i];
+    if (!section) return [];
+    return [sharedNote(section, note, sections.filter((other) => other === section).length, ensemble)];
+  });
+  return joinUnisons(notes, CALIBRATION_A4);
+}
+
+/** A note of a section that divides into some notes. */
+function sharedNote(section: Section, midi: Midi, notes: number, { players }: Ensemble): Joinable {
+  return noteOf(SECTION_FACTS[section].instrument, midi, players[section] / notes);
 }

@@ -5,8 +5,8 @@ import { moveTrial } from '#shared/voicing/moves/move-trial';
 import { lostBy, type HelpfulMove } from '#shared/voicing/moves/moves';
 import { possibleMoves } from '#shared/voicing/moves/possible-moves';
 import { modelFor } from '#shared/voicing/muddiness/models';
-import { indexOf } from '#shared/voicing/muddiness/scores';
-import { differClearly } from '#shared/voicing/uncertainty';
+import { densityOfIndex, indexOf } from '#shared/voicing/muddiness/scores';
+import { clearlyBelow, differClearly } from '#shared/voicing/uncertainty';
 
 /** As many as a reader weighs against each other. */
 const MOVES_SHOWN = 8;
@@ -32,11 +32,13 @@ export function helpfulMoves(
   const before = analysis.muddiness.index;
   if (!differClearly(before, 0)) return [];
   const model = modelFor(settings.a4Hz);
+  const { threshold } = model.constants;
   const shares = voiceShares(analysis.pairs);
+  const useless = densityOfIndex(clearlyBelow(before), threshold);
   const trial = moveTrial(chord, settings, model);
-  return possibleMoves(chord.voices, settings.ensemble.bass)
-    .filter(({ ids }) => ids.some((id) => (shares.get(id) ?? 0) >= LEAST_SHARE))
-    .map((move) => ({ ...move, before, after: indexOf(trial.after(move), model.constants.threshold) }))
+  const asked = ({ id }: { readonly id: string }) => (shares.get(id) ?? 0) >= LEAST_SHARE;
+  return possibleMoves(chord.voices, settings.ensemble.bass, asked)
+    .map((move) => ({ ...move, before, after: indexOf(trial.after(move, useless), threshold) }))
     .filter(({ after }) => after < before && differClearly(after, before))
     .map((move) => ({ ...move, lost: lostBy(chord.voices, move) }))
     .sort((a, b) => Number(a.lost !== null) - Number(b.lost !== null) || a.after - b.after)

@@ -4,7 +4,7 @@ import type { SoundSettings } from '#shared/voicing/analysis';
 import type { MuddinessEntry, MuddinessModel } from '#shared/voicing/muddiness/model';
 import { highestOf } from '#shared/voicing/muddiness/model';
 import type { MuddinessSums } from '#shared/voicing/muddiness/sums';
-import { addEntry, clearSums, copySums, sumsOn } from '#shared/voicing/muddiness/sums';
+import { addEntry, addPairs, addSound, clearSums, copySums, sumsOn } from '#shared/voicing/muddiness/sums';
 import type { Move } from '#shared/voicing/moves/moves';
 import { movedVoices } from '#shared/voicing/moves/moves';
 import type { TrialVoice } from '#shared/voicing/moves/trial-voices';
@@ -14,9 +14,12 @@ import { bassOf, sourceOf, sourcesOf } from '#shared/voicing/sound';
 /** Tries moves of one chord, one after the other. */
 export interface MoveTrial {
   /** The highest ρ of the chord as it is. */
-  readonly before: number;
-  /** The highest ρ after a move. */
-  readonly after: (move: Move) => number;
+  readonly before: () => number;
+  /**
+   * The highest ρ after a move. Where what stays alone is sure to cloud more than `useless`, it is not looked at
+   * further and the answer is some density above `useless`.
+   */
+  readonly after: (move: Move, useless?: number) => number;
 }
 
 /** What stays when some voices move, added up once for all the moves of these voices. */
@@ -37,7 +40,7 @@ export function moveTrial(chord: Chord, settings: SoundSettings, model: Muddines
   const players = playersOf(chord.voices, settings.ensemble);
   const even = isEvenlyShared(chord.voices, players);
   const rest: Rest = { key: '', sums: sumsOn(model.axis), entries: [], voices: [] };
-  const after = (move: Move): number => {
+  const after = (move: Move, useless = Infinity): number => {
     const voices = movedVoices(chord.voices, move);
     const regrouped = move.kind === 'section' || move.kind === 'leaveOut';
     const now = regrouped || !even ? playersOf(voices, settings.ensemble) : players;
@@ -54,9 +57,9 @@ export function moveTrial(chord: Chord, settings: SoundSettings, model: Muddines
     const stay = base.filter(({ source }) => !move.ids.includes(source.id));
     const stayed = stay.map((voice) => louderVoice(voice, now.get(voice.source.id) ?? 1, model));
     if (stayed.some((voice, i) => voice !== stay[i])) return highestAnew([...stayed, ...moved], model);
-    return highestWith(moved, restWithout(move.ids.join(' '), stay, rest, model), model);
+    return highestWith(moved, restWithout(move.ids.join(' '), stay, rest, model), useless, model);
   };
-  return { before: highestAnew(base, model), after };
+  return { before: () => highestAnew(base, model), after };
 }
 
 function soundAgain(
@@ -83,20 +86,30 @@ function restWithout(key: string, stay: readonly TrialVoice[], rest: Rest, model
 }
 
 /** Adds the moved voices to what stays; where that makes a unison everything is added up anew. */
-function highestWith(moved: readonly TrialVoice[], rest: Rest, model: MuddinessModel): number {
+function highestWith(
+  moved: readonly TrialVoice[],
+  rest: Rest,
+  useless: number,
+  model: MuddinessModel,
+): number {
   const all = [...rest.voices, ...moved];
   const joined = joinedEntries(all, model);
+  const { scratch } = model;
   if (joined.length < rest.entries.length + moved.length) {
-    addAll(model.scratch, joined, model);
-    return highestOf(model.scratch, model);
+    addAll(scratch, joined, model);
+    return highestOf(scratch, model);
   }
-  copySums(rest.sums, model.scratch);
+  copySums(rest.sums, scratch);
+  for (const { entry } of moved) addSound(scratch, entry);
+  // New pairs only add to the clouding: what is there without them is the least that there can be.
+  const least = useless === Infinity ? 0 : highestOf(scratch, model);
+  if (least > useless) return least;
   const entries = [...rest.entries];
   for (const { entry } of moved) {
-    addEntry(model.scratch, entry, entries, model);
+    addPairs(scratch, entry, entries, model);
     entries.push(entry);
   }
-  return highestOf(model.scratch, model);
+  return highestOf(scratch, model);
 }
 
 function highestAnew(voices: readonly TrialVoice[], model: MuddinessModel): number {

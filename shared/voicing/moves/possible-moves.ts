@@ -4,24 +4,32 @@ import { rangeOf } from '#shared/strings/ranges';
 import type { BassKind, Section } from '#shared/strings/sections';
 import { SECTIONS } from '#shared/strings/sections';
 import type { Voice } from '#shared/study/study.document';
-import type { Midi } from '#shared/units';
+import type { Midi, Semitones } from '#shared/units';
 import type { Move, MoveKind } from '#shared/voicing/moves/moves';
 
 const HIGHEST_OCTAVE = 8;
+const OCTAVE: Semitones = 12;
 
 /**
  * Every single move of a chord's voices: an octave up or down, to the next chord tone either way, to another
  * section that reaches the note, left out. Locked voices stay; linked ones move together.
  * @param voices of one chord
  * @param bassKind decides how low the double basses reach
+ * @param asked whether moves of a voice, and of those linked to it, are wanted
  */
-export function possibleMoves(voices: readonly Voice[], bassKind: BassKind): readonly Move[] {
+export function possibleMoves(
+  voices: readonly Voice[],
+  bassKind: BassKind,
+  asked: (voice: Voice) => boolean = () => true,
+): readonly Move[] {
   const tones = chordTones(voices);
-  return movable(voices).flatMap((group) => [
-    ...shifts(group, bassKind, tones),
-    ...otherSections(group, bassKind),
-    ...leftOut(group, voices.length),
-  ]);
+  return movable(voices)
+    .filter((group) => group.some(asked))
+    .flatMap((group) => [
+      ...shifts(group, bassKind, tones),
+      ...otherSections(group, bassKind),
+      ...leftOut(group, voices.length),
+    ]);
 }
 
 /** Voices that move as one; a group with a locked voice does not move. */
@@ -61,10 +69,17 @@ function shifts(group: readonly Voice[], bassKind: BassKind, tones: readonly Pit
 /** The nearest other tone of the chord above or below. */
 function nextTone(from: Pitch, tones: readonly Pitch[], way: 1 | -1): Pitch | undefined {
   const here = midiOf(from);
-  return tones
-    .flatMap((tone) => [-1, 0, 1].map((by) => ({ ...tone, octave: from.octave + by })))
-    .filter((tone) => way * (midiOf(tone) - here) > 0)
-    .sort((a, b) => way * (midiOf(a) - midiOf(b)))[0];
+  let nearest: Pitch | undefined;
+  let least = Infinity;
+  for (const tone of tones) {
+    // The tones have octave 0: this far up or down to the first beyond the note itself.
+    const octave = Math.floor((way * (here - midiOf(tone))) / OCTAVE) + 1;
+    const away = way * (midiOf(tone) - here) + OCTAVE * octave;
+    if (away >= least) continue;
+    least = away;
+    nearest = { ...tone, octave: way * octave };
+  }
+  return nearest;
 }
 
 /** Moves a whole group as its first voice moves, where all of it stays within reach. */

@@ -18,8 +18,11 @@ export interface PitchAxis {
   readonly count: number;
 }
 
-/** A window's values at 0, 1, 2 … finer steps from its centre; 1 at the centre. */
-export type Window = Float64Array;
+/** A window's values at the finer steps from −reach to reach; 1 in the middle. */
+export interface Window {
+  readonly reach: number;
+  readonly weights: Float64Array;
+}
 
 /** Values along a stretch of the axis; nothing outside it. */
 export interface Profile {
@@ -50,9 +53,13 @@ export function windowValue(distance: Semitones, width: Semitones): number {
 
 /** @returns the window on an axis, up to where it counts as nothing */
 export function windowOn({ step }: PitchAxis, width: Semitones): Window {
-  const reach = Math.min(width * Math.sqrt(-Math.log(WINDOW_END) / EXPONENT), MARGIN);
   const finer = step / FINER;
-  return Float64Array.from({ length: Math.ceil(reach / finer) + 1 }, (_, i) => windowValue(i * finer, width));
+  const farthest = Math.min(width * Math.sqrt(-Math.log(WINDOW_END) / EXPONENT), MARGIN);
+  const reach = Math.ceil(farthest / finer);
+  const weights = Float64Array.from({ length: 2 * reach + 1 }, (_, i) =>
+    windowValue((i - reach) * finer, width),
+  );
+  return { reach, weights };
 }
 
 /** Gathers masses at pitches and smooths them; used again and again, so that adding allocates nothing. */
@@ -98,20 +105,21 @@ interface Stretch {
 
 function smoothed(masses: Float64Array, stretch: Stretch, axis: PitchAxis, window: Window): Profile {
   const { first, last, margin, scale } = stretch;
-  const reach = window.length - 1;
+  const { reach, weights } = window;
   const from = Math.max(Math.ceil((first - margin - reach) / FINER), 0);
   const to = Math.min(Math.floor((last - margin + reach) / FINER), axis.count - 1);
   if (to < from) return EMPTY_PROFILE;
   const values = new Float64Array(to - from + 1);
   for (let source = first; source <= last; source += 1) {
-    const mass = (masses[source] ?? 0) * scale;
+    const mass = masses[source] ?? 0;
     if (mass === 0) continue;
     const centre = source - margin;
+    const low = Math.max(Math.ceil((centre - reach) / FINER), from);
     const high = Math.min(Math.floor((centre + reach) / FINER), to);
-    for (let point = Math.max(Math.ceil((centre - reach) / FINER), from); point <= high; point += 1) {
-      const distance = FINER * point - centre;
-      const weight = window[distance < 0 ? -distance : distance] ?? 0;
-      values[point - from] = (values[point - from] ?? 0) + mass * weight;
+    const scaled = mass * scale;
+    let weight = reach + FINER * low - centre;
+    for (let point = low - from; point <= high - from; point += 1, weight += FINER) {
+      values[point] = (values[point] ?? 0) + scaled * (weights[weight] ?? 0);
     }
   }
   return { from, values };

@@ -89,8 +89,11 @@ function mixedKey(voices: readonly Joinable[]): string {
 }
 
 function mixedTone(voices: readonly Joinable[], a4Hz: Hertz): Tone {
+  const shapes = voices.map(spectrumOf);
+  if (voices.every(({ dynamic }) => dynamic === 'mf'))
+    return toneOf(jointPartials(voices, shapes, shapes), a4Hz);
   const atMf = voices.map((voice) => spectrumOf({ ...voice, dynamic: 'mf' }));
-  return toneOf(jointPartials(voices, voices.map(spectrumOf), atMf), a4Hz, jointPartials(voices, atMf, atMf));
+  return toneOf(jointPartials(voices, shapes, atMf), a4Hz, jointPartials(voices, atMf, atMf));
 }
 
 /** Energies of shapes, each scaled at mf to its voice's nominal power, added partial by partial. */

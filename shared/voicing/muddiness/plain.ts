@@ -73,7 +73,7 @@ function meetAll(
       const mean = (low + high) / 2;
       const y = Math.abs(low - high) / erbAt(mean);
       const product = (a.amplitudes[i] ?? 0) * (b.amplitudes[j] ?? 0);
-      fusion += (a.shape[i] ?? 0) * (b.shape[j] ?? 0) * Math.exp(-((y / fusionErb) ** 2));
+      fusion += (a.series[i] ?? 0) * (b.series[j] ?? 0) * Math.exp(-((y / fusionErb) ** 2));
       if (y < reachErb) meet(mean, product * ((y / peakErb) * Math.exp(1 - y / peakErb)) ** sharpness);
     }
   }

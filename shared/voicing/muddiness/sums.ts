@@ -48,12 +48,24 @@ export function addEntry(
   sums: MuddinessSums,
   entry: MuddinessEntry,
   others: readonly MuddinessEntry[],
+  model: Pick<MuddinessModel, 'tables'>,
+): void {
+  addPairs(sums, entry, others, model);
+  addSound(sums, entry);
+}
+
+/** Adds what a voice clouds together with others. */
+export function addPairs(
+  { clouding }: MuddinessSums,
+  { table, weight }: MuddinessEntry,
+  others: readonly MuddinessEntry[],
   { tables }: Pick<MuddinessModel, 'tables'>,
 ): void {
-  const { table, energy, weight } = entry;
-  for (const other of others) {
-    addProfile(sums.clouding, tables.ofPair(table, other.table), weight * other.weight);
-  }
+  for (const other of others) addProfile(clouding, tables.ofPair(table, other.table), weight * other.weight);
+}
+
+/** Adds what a voice sounds. */
+export function addSound(sums: MuddinessSums, { table, energy }: MuddinessEntry): void {
   addProfile(sums.local, table.energy, energy);
   addProfile(sums.weightedEnergy, table.neighbourhood, energy * energy);
   addProfile(sums.weight, table.neighbourhood, energy);

@@ -89,9 +89,10 @@ function energyOf({ pitches, amplitudes }: Tone, deposit: Deposit, window: Windo
 function neighbourhoodOf({ fundamental }: Tone, axis: PitchAxis): Profile {
   const from = Math.max(Math.ceil((fundamental - NEIGHBOURHOOD - AXIS_LOW) / axis.step), 0);
   const to = Math.min(Math.floor((fundamental + NEIGHBOURHOOD - AXIS_LOW) / axis.step), axis.count - 1);
-  const values = Float64Array.from({ length: Math.max(to - from + 1, 0) }, (_, i) =>
-    neighbourWeight(AXIS_LOW + axis.step * (from + i) - fundamental),
-  );
+  const values = new Float64Array(Math.max(to - from + 1, 0));
+  for (let i = 0; i < values.length; i += 1) {
+    values[i] = neighbourWeight(AXIS_LOW + axis.step * (from + i) - fundamental);
+  }
   return { from, values };
 }
 

@@ -5,6 +5,7 @@ import type { Partial } from '#shared/voicing/analysis';
 import type { MuddinessConstants } from '#shared/voicing/muddiness/constants';
 
 const DB_PER_AMPLITUDE_DECADE = 20;
+const DB_PER_POWER_DECADE = 10;
 /** The power that has a quick way of its own. */
 const SQUARE_ROOT = 0.5;
 
@@ -18,8 +19,8 @@ export interface Tone {
   readonly fundamental: Midi;
   readonly frequencies: Float64Array;
   readonly amplitudes: Float64Array;
-  /** The amplitudes at mf: whether partials fuse is a matter of pitch, not of how loud one plays. */
-  readonly shape: Float64Array;
+  /** Weights of the same partials in an ideal series, 1/n, their squares adding up to 1: by these tones fuse. */
+  readonly series: Float64Array;
   /** Where the partials lie on the pitch axis. */
   readonly pitches: Float64Array;
 }
@@ -30,21 +31,45 @@ export interface Tone {
  * @param atMf the same partials at mf, by which they are scaled
  */
 export function toneOf(partials: readonly Partial[], a4Hz: Hertz, atMf: readonly Partial[] = partials): Tone {
-  const frequencies = Float64Array.from(partials, ({ frequencyHz }) => frequencyHz);
-  const atMfAmplitudes = Float64Array.from(atMf, amplitudeOf);
-  const scale = 1 / Math.sqrt(atMfAmplitudes.reduce((sum, a) => sum + a * a, 0));
-  return {
+  const { length } = partials;
+  const tone = {
     partials,
-    fundamental: midiOfFrequency(frequencies[0] ?? 0, a4Hz),
-    frequencies,
-    amplitudes: Float64Array.from(partials, (partial) => amplitudeOf(partial) * scale),
-    shape: atMfAmplitudes.map((a) => a * scale),
-    pitches: frequencies.map((frequency) => midiOfFrequency(frequency, a4Hz)),
+    fundamental: midiOfFrequency(partials[0]?.frequencyHz ?? 0, a4Hz),
+    frequencies: new Float64Array(length),
+    amplitudes: new Float64Array(length),
+    series: new Float64Array(length),
+    pitches: new Float64Array(length),
   };
+  const scale = 1 / Math.sqrt(sumOf(atMf, energyOf));
+  const seriesScale = 1 / Math.sqrt(sumOf(partials, seriesEnergy));
+  for (let i = 0; i < length; i += 1) {
+    const partial = partials[i];
+    if (!partial) break;
+    tone.frequencies[i] = partial.frequencyHz;
+    tone.amplitudes[i] = scale * 10 ** (partial.levelDb / DB_PER_AMPLITUDE_DECADE);
+    tone.series[i] = seriesScale / partial.n;
+    tone.pitches[i] = midiOfFrequency(partial.frequencyHz, a4Hz);
+  }
+  return tone;
 }
 
-function amplitudeOf({ levelDb }: Partial): number {
-  return 10 ** (levelDb / DB_PER_AMPLITUDE_DECADE);
+function sumOf(partials: readonly Partial[], part: (partial: Partial) => number): number {
+  let sum = 0;
+  for (const partial of partials) sum += part(partial);
+  return sum;
+}
+
+function energyOf({ levelDb }: Partial): number {
+  return 10 ** (levelDb / DB_PER_POWER_DECADE);
+}
+
+/**
+ * Whether two notes fuse is a matter of their pitches: how loud a body lets single partials through makes a fifth
+ * no less a fifth.
+ * @source Helmholtz 1863: 1/n, the force of ideal stick-slip motion; that fusion goes by it is this index's own
+ */
+function seriesEnergy({ n }: Partial): number {
+  return 1 / n ** 2;
 }
 
 /**

@@ -3,7 +3,9 @@ import { LOW_INTERVAL_LIMITS } from '#shared/data/low-interval-limits';
 import {
   CLEAR_TRIAD,
   CLOSE_LOW_CHORDS,
+  LOW_FIFTHS,
   MIDDLE_TRIAD,
+  OCTAVES_BELOW,
   OPEN_CHORDS,
   PASSING_CHORDS,
 } from '#shared/data/model-chords';
@@ -16,7 +18,15 @@ interface Input {
 }
 
 const RATED = REGISTER_RATINGS.filter(({ register }) => register <= MUDDY_REGISTERS).length;
-const MADE = [...OPEN_CHORDS, ...CLOSE_LOW_CHORDS, ...PASSING_CHORDS, CLEAR_TRIAD, MIDDLE_TRIAD].length;
+const MADE = [
+  ...OPEN_CHORDS,
+  ...CLOSE_LOW_CHORDS,
+  ...PASSING_CHORDS,
+  ...LOW_FIFTHS,
+  ...OCTAVES_BELOW,
+  CLEAR_TRIAD,
+  MIDDLE_TRIAD,
+].length;
 
 const INPUTS: Readonly<Record<string, Input>> = {
   'shared/data/low-interval-limits': {
@@ -32,11 +42,11 @@ const INPUTS: Readonly<Record<string, Input>> = {
     source: 'Eerola & Lahdelma, published data (journal from memory)',
   },
   'shared/data/score-chords': {
-    name: `Chords of scores, ${SCORE_CHORDS.length}, none with a pair under its limit`,
+    name: `Chords of scores, ${SCORE_CHORDS.length}, none with a pair under its limit, as scored and dealt from the basses up`,
     source: 'public-domain scores in CC0 encodings',
   },
   'shared/data/model-chords': {
-    name: `Model chords, ${MADE}: open, close and low, or passing a limit`,
+    name: `Model chords, ${MADE}: open, close and low, or passing a limit, also dealt from the basses up`,
     source: 'made up as yardsticks; no published source',
   },
 };

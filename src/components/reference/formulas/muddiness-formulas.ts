@@ -19,6 +19,7 @@ const h = symbol('h');
 const rho = symbol('ρ');
 const m = symbol('m');
 const [a1, a2] = [symbol('a', '1'), symbol('a', '2')];
+const [b1, b2] = [symbol('b', '1'), symbol('b', '2')];
 const [f1, f2] = [symbol('f', '1'), symbol('f', '2')];
 const fusion = symbol('F');
 const pairs = 'pairs of partials';
@@ -45,14 +46,18 @@ export const MUDDINESS_FORMULAS: readonly Formula[] = [
   },
   {
     ...{ id: 'fusion', says: 'How far the partials of two voices coincide and fuse', left: fusion },
-    right: over(pairs, product(a1, a2, call('exp', negative(power(quotient(y, symbol('c')), 2))))),
-    where: 'amplitudes of the shape alone: the squares of each voice’s add up to 1 at mf',
+    right: over(pairs, product(b1, b2, call('exp', negative(power(quotient(y, symbol('c')), 2))))),
+    where:
+      'b, the weights of an ideal series, 1/n, the squares of each voice’s adding up to 1: notes fuse by their ' +
+      'pitches, whatever plays them',
   },
   {
     ...{ id: 'pair', says: 'What two voices cloud, each contribution at the mean of its two partials' },
     left: symbol('r'),
     right: quotient(over(pairs, product(a1, a2, g)), sum(1, product(symbol('κ'), fusion))),
-    where: 'voices in unison count as one voice of their joint energy',
+    where:
+      'a, the amplitudes, the squares of each voice’s adding up to its energy; voices in unison count as one ' +
+      'voice of their joint energy',
   },
   {
     ...{ id: 'window', says: 'The smooth window along the pitch axis', left: symbol('W') },

@@ -70,6 +70,7 @@ describe('the file of constants', () => {
       openChords: [],
       closeChords: [],
       passingChords: [],
+      dealt: { fifths: [], octaves: [], open: [], score: [], close: [], passing: [] },
       clearTriad: 1,
       middleTriad: 30,
       dynamicsMove: 0,

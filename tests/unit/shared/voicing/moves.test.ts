@@ -66,7 +66,10 @@ describe('moves that help', () => {
           const settings = { ...EVEN_SETTINGS, intonation };
           const { threshold } = modelFor(440).constants;
           const trial = moveTrial(chord, settings, modelFor(440));
-          expect(indexOf(trial.before, threshold)).toBeCloseTo(indexAfter(chord, chord.voices, settings), 9);
+          expect(indexOf(trial.before(), threshold)).toBeCloseTo(
+            indexAfter(chord, chord.voices, settings),
+            9,
+          );
           for (const move of possibleMoves(chord.voices, 'four-string')) {
             const after = indexAfter(chord, [...movedVoices(chord.voices, move)], settings);
             expect(indexOf(trial.after(move), threshold)).toBeCloseTo(after, 9);
@@ -74,6 +77,24 @@ describe('moves that help', () => {
         },
       ),
       { numRuns: 8 },
+    );
+  });
+
+  it('when a density would be useless, then a move is either weighed in full or known to lie above it', () => {
+    const model = modelFor(440);
+    fc.assert(
+      fc.property(chords, fc.double({ min: 0.3, max: 1.1, noNaN: true }), (chord, part) => {
+        const trial = moveTrial(chord, EVEN_SETTINGS, model);
+        const useless = trial.before() * part;
+        for (const move of possibleMoves(chord.voices, 'four-string')) {
+          const whole = trial.after(move);
+          const told = trial.after(move, useless);
+          if (told === whole) continue;
+          expect(told).toBeGreaterThan(useless);
+          expect(whole).toBeGreaterThanOrEqual(told);
+        }
+      }),
+      { numRuns: 20 },
     );
   });
 
