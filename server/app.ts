@@ -18,8 +18,10 @@ import { csrfProtection } from '#server/sessions/csrf';
 import { sessions, viewer } from '#server/sessions/session.middleware';
 import { sessionRoutes } from '#server/sessions/sessions.routes';
 import { clientFolder } from '#server/setup/product';
+import { shelfRoutes } from '#server/shelf/shelf.routes';
 import { shareRoutes } from '#server/shares/shares.routes';
 import { studyRoutes } from '#server/studies/studies.routes';
+import { versionRoutes } from '#server/studies/versions.routes';
 
 /**
  * For scripts and lessons: knows nobody, reads and sets no cookie. It asks for no CSRF token, since such a token
@@ -38,6 +40,7 @@ function sessionRouter(deps: Deps): Router {
   router.use(sessions(deps), csrfProtection, viewer(deps));
   router.use(sessionRoutes(deps), accountRoutes(deps));
   router.use(studyRoutes(deps), shareRoutes(deps), annotationRoutes(deps));
+  router.use(versionRoutes(deps), shelfRoutes(deps));
   if (deps.env.mode === 'demo') router.use(demoRoutes(deps));
   router.use('/api', unknownRoute);
   return router;

@@ -1,15 +1,13 @@
 import type { Study } from '#shared/contracts/studies';
-import type { StudyDocument } from '#shared/study/study.document';
+import { MAX_TITLE, type StudyDocument } from '#shared/study/study.document';
 import { randomSecret } from '#server/accounts/secrets';
 import type { Transaction } from '#server/db/connection';
 import { insertOnce } from '#server/db/insert-once';
 import { inTransaction } from '#server/db/transaction';
 import type { Deps } from '#server/deps';
 import type { Viewer } from '#server/http/bind';
-import { invalidInput } from '#server/http/request-error';
 import { findAcceptedDocument, insertSave } from '#server/studies/saves.repository';
 import { checkSameRequest } from '#server/studies/saving.service';
-import { findStudies, type Position } from '#server/studies/studies.listing';
 import { lockTrash, unknownStudy } from '#server/studies/studies.access';
 import { findStudy, findStudyIdByKey, insertStudy, setDeleted } from '#server/studies/studies.repository';
 
@@ -31,7 +29,7 @@ async function findMade(
 }
 
 export async function makeStudy(
-  { db, clock }: Pick<Deps, 'db' | 'clock'>,
+  { db, clock, summaries }: Pick<Deps, 'db' | 'clock' | 'summaries'>,
   viewer: Viewer,
   study: NewStudy,
 ): Promise<Study> {
@@ -45,32 +43,33 @@ export async function makeStudy(
     await insertSave(tx, save, { kind: 'accepted', number: 1 });
     return made;
   });
+  summaries.kick();
   return findStudy(db, viewer, id, 1);
 }
 
-const POSITION = /^(\d{1,15})\.([A-Za-z0-9_-]{16,36})$/;
+const COPY = ' (copy)';
 
-function writePosition(study: Study): string {
-  return `${Date.parse(study.savedAt)}.${study.id}`;
+/** Cuts between characters: half of one could not be kept. */
+function titleOfCopy(title: string): string {
+  const characters = Array.from(title);
+  while ((characters.join('') + COPY).length > MAX_TITLE) characters.pop();
+  return characters.join('') + COPY;
 }
 
-function readPosition(after: string | undefined): Position | null {
-  if (after === undefined) return null;
-  const [, milliseconds, id] = POSITION.exec(after) ?? [];
-  if (milliseconds === undefined || id === undefined) {
-    throw invalidInput([{ path: 'query.after', message: 'this is no place in the list' }]);
-  }
-  return { savedAt: new Date(Number(milliseconds)), id };
-}
-
-export async function listPage(
-  { db }: Pick<Deps, 'db'>,
+/** Makes a study of the viewer's own like one that they may read; asked again, it is still one. */
+export async function duplicate(
+  deps: Pick<Deps, 'db' | 'clock' | 'summaries'>,
   viewer: Viewer,
-  query: { readonly after?: string | undefined; readonly limit: number },
-): Promise<{ studies: Study[]; next: string | null }> {
-  const { studies, more } = await findStudies(db, viewer, readPosition(query.after), query.limit);
-  const last = studies.at(-1);
-  return { studies, next: more && last !== undefined ? writePosition(last) : null };
+  studyId: string,
+  requestKey: string,
+): Promise<Study> {
+  const { document } = await findStudy(deps.db, viewer, studyId);
+  const made = await findStudyIdByKey(deps.db, viewer.id, requestKey);
+  if (made !== null) return findStudy(deps.db, viewer, made, 1);
+  return makeStudy(deps, viewer, {
+    document: { ...document, title: titleOfCopy(document.title) },
+    requestKey,
+  });
 }
 
 /** Deleting twice is the same as once. */

@@ -11,9 +11,17 @@ import { SECTIONS } from '#shared/strings/sections';
 export function aboutStudy(study: DraftDocument): string {
   const { key, a4Hz, ensemble, about, limits } = study;
   const players = SECTIONS.map((section) => ensemble.players[section]).join('.');
-  const facts = [`${tonicName(key.tonic)} ${key.mode}`, `A4 = ${a4Hz} Hz`, players];
+  const facts = [keyName(key), `A4 = ${a4Hz} Hz`, players];
   const own = limits === null ? [] : ['own low limits'];
   return [...(about ? [about] : []), ...facts, ...own].join(' · ');
+}
+
+/**
+ * @returns a key by its English name
+ * @example keyName({ tonic: 'Bb', mode: 'minor' }) // 'B♭ minor'
+ */
+export function keyName({ tonic, mode }: DraftDocument['key']): string {
+  return `${tonicName(tonic)} ${mode}`;
 }
 
 const ALTERATIONS: Readonly<Record<string, number>> = { b: -1, '#': 1 };

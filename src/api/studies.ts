@@ -27,3 +27,14 @@ export const createShare = (studyId: string, body: BodyInputOf<typeof contract.c
 
 export const deleteShare = (studyId: string, shareId: string) =>
   call(contract.deleteShare, { params: { studyId, shareId } });
+
+export const readStudyFilters = () => call(contract.readStudyFilters, {});
+
+export const setStudyTags = (studyId: string, body: BodyInputOf<typeof contract.setStudyTags>) =>
+  call(contract.setStudyTags, { params: { studyId }, body });
+
+export const duplicateStudy = (studyId: string, body: BodyInputOf<typeof contract.duplicateStudy>) =>
+  call(contract.duplicateStudy, { params: { studyId }, body });
+
+export const listDeletedStudies = (query: QueryInputOf<typeof contract.listDeletedStudies>) =>
+  call(contract.listDeletedStudies, { query });

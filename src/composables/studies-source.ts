@@ -1,23 +1,22 @@
-import type { Study } from '#shared/contracts/studies';
+import type { Study, StudyRow } from '#shared/contracts/studies';
 import { voicingsOf, type Voicing } from '#shared/study/voicing';
 import { listStudies, readStudy } from '@/api/studies';
 import type { VoicingGroup, VoicingSource } from '@/composables/voicing-sources';
 
-/** The most that one answer may hold. */
-const PAGE = 50;
+/** As many as are read in one go. */
+const PAGE = 20;
 
 function voicingsIn({ id, document }: Study): readonly Voicing[] {
   return voicingsOf(document, { studyId: id, number: null, from: document.title });
 }
 
-function groupOf(study: Study): VoicingGroup {
-  const whose = study.relation === 'owner' ? 'yours' : `shared by ${study.ownerName}`;
-  const { length } = study.document.chords;
+function groupOf(row: StudyRow): VoicingGroup {
+  const whose = row.relation === 'owner' ? 'yours' : `shared by ${row.ownerName}`;
   return {
-    id: study.id,
-    title: study.document.title,
-    detail: `${whose}, ${length === 1 ? '1 chord' : `${length} chords`}`,
-    voicings: () => Promise.resolve(voicingsIn(study)),
+    id: row.id,
+    title: row.title,
+    detail: `${whose}, ${row.chordCount === 1 ? '1 chord' : `${row.chordCount} chords`}`,
+    voicings: async () => voicingsIn(await readStudy(row.id)),
   };
 }
 
@@ -32,8 +31,9 @@ export function studiesSource(signedIn: () => boolean, openId: () => string | nu
     unavailable: () =>
       signedIn() ? null : 'Sign in to compare with your studies and those shared with you.',
     searchable: true,
-    async page(after) {
-      const { studies, next } = await listStudies({ ...(after !== null && { after }), limit: PAGE });
+    async page(search, after) {
+      const asked = { ...(search !== '' && { search }), ...(after !== null && { after }), limit: PAGE };
+      const { studies, next } = await listStudies(asked);
       return { groups: studies.filter(({ id }) => id !== openId()).map(groupOf), next };
     },
     async open({ studyId, number, chordId }) {

@@ -67,6 +67,23 @@ export function useBenchDocument() {
     study.value = document;
   }
 
+  /**
+   * Takes in what was saved elsewhere: under the present and under every step that led to it, so that undo takes back
+   * what was done here and nothing else.
+   * @param alter how a state of the document takes it in; `null` where it cannot
+   * @returns whether the present could
+   */
+  function rebase(alter: (document: DraftDocument) => DraftDocument | null): boolean {
+    const present = alter(study.value);
+    if (!present) return false;
+    const through = (steps: readonly DraftDocument[]) => steps.flatMap((step) => alter(step) ?? []);
+    const { past, future } = history.value;
+    history.value = { past: through(past), future: through(future) };
+    gestureFrom.value = gestureFrom.value && (alter(gestureFrom.value) ?? present);
+    study.value = present;
+    return true;
+  }
+
   /** @param saved the revision that was sent; changes made meanwhile stay unsaved */
   function markSaved(saved: number = revision.value): void {
     savedRevision.value = saved;
@@ -74,5 +91,5 @@ export function useBenchDocument() {
 
   const state = { study, history, readOnly, revision, savedRevision, gestureFrom };
   const steps = { change, beginGesture, endGesture, cancelGesture, undo, redo };
-  return { ...state, dirty, canUndo, canRedo, ...steps, open, markSaved };
+  return { ...state, dirty, canUndo, canRedo, ...steps, open, rebase, markSaved };
 }

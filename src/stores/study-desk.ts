@@ -1,7 +1,7 @@
 import { computed, ref, shallowRef } from 'vue';
 import type { BodyOf } from '#shared/contracts/endpoint';
 import { mayDoToStudy } from '#shared/contracts/permissions';
-import type { saveStudy, StaleDetails, Study } from '#shared/contracts/studies';
+import type { Merged, saveStudy, StaleDetails, Study } from '#shared/contracts/studies';
 import type { LoadStatus } from '@/api/load-status';
 import { useBenchStore } from '@/stores/bench.store';
 import { browserStorage } from '@/stores/draft-storage';
@@ -35,6 +35,8 @@ export function useStudyDesk() {
   const failure = shallowRef<Exclude<SaveFailure, { kind: 'stale' }> | null>(null);
   const failures = ref(0);
   const conflict = shallowRef<StaleDetails | null>(null);
+  /** What others had saved meanwhile, where the last save was merged with it. */
+  const merged = shallowRef<Merged | null>(null);
   /** Why the bench cannot be saved as it stands. */
   const unfinished = ref<string | null>(null);
   const keptInBrowser = ref(true);
@@ -51,7 +53,7 @@ export function useStudyDesk() {
 
   const around = { bench, session: useSessionStore(), storage: browserStorage() };
   const opening = { accountId, study, status, problem, wantedId, basedOn };
-  const saving = { sending, inFlight, failure, failures, conflict, unfinished, keptInBrowser };
+  const saving = { sending, inFlight, failure, failures, conflict, merged, unfinished, keptInBrowser };
   return { ...around, ...opening, ...saving, maySave, hasUnsaved, saveState, saveProblem };
 }
 export type StudyDesk = ReturnType<typeof useStudyDesk>;
@@ -65,6 +67,7 @@ export function layOut(desk: StudyDesk, study: Study | null): void {
   desk.failure.value = null;
   desk.failures.value = 0;
   desk.conflict.value = null;
+  desk.merged.value = null;
   desk.unfinished.value = null;
   desk.bench.readOnly = study !== null && !desk.maySave.value;
 }

@@ -1,11 +1,14 @@
 import { until, useEventListener, useTimeoutFn } from '@vueuse/core';
 import { watch } from 'vue';
 import type { z } from 'zod';
-import type { Study } from '#shared/contracts/studies';
+import type { SavedStudy } from '#shared/contracts/studies';
+import type { DraftDocument } from '#shared/study/draft';
 import { sameStudy } from '#shared/study/study.differences';
+import { mergeStudies } from '#shared/study/study.merge';
 import { studyDocumentSchema, type StudyDocument } from '#shared/study/study.document';
 import { newRequestKey } from '@/api/request-key';
 import { saveStudy } from '@/api/studies';
+import { deviceKey } from '@/stores/device-key';
 import { forgetWork, readWork, writeWork } from '@/stores/kept-work';
 import { retryDelayMs } from '@/stores/retry-delay';
 import { saveFailureOf } from '@/stores/save-failure';
@@ -43,21 +46,41 @@ export function finishedDocument(desk: StudyDesk): StudyDocument | null {
 function prepare(desk: StudyDesk): Sending | null {
   const document = desk.bench.dirty ? finishedDocument(desk) : null;
   if (!document) return null;
-  const body = { document, basedOn: desk.basedOn.value, requestKey: newRequestKey() };
+  const body = {
+    document,
+    basedOn: desk.basedOn.value,
+    requestKey: newRequestKey(),
+    deviceKey: deviceKey(desk.storage),
+  };
   return { body, revision: desk.bench.revision };
 }
 
-/** A study that was left while its save was on its way: what the save did not hold stays kept. */
-function acceptElsewhere({ storage, accountId }: StudyDesk, sent: Sending, saved: Study): void {
-  const work = readWork(storage, saved.id, accountId.value ?? '');
-  if (!work || sameStudy(work.document, sent.body.document)) forgetWork(storage, saved.id);
-  else writeWork(storage, saved.id, { ...work, basedOn: saved.number, pending: null });
+/** @returns how a state of the document takes in what others had saved, where the save was merged with that */
+function takingIn(sent: Sending, saved: SavedStudy) {
+  const base = sent.body.document;
+  return (mine: DraftDocument): DraftDocument | null =>
+    saved.merged ? mergeStudies({ base, newest: saved.document, mine }) : mine;
 }
 
-function accept(desk: StudyDesk, sent: Sending, saved: Study): void {
+/** A study that was left while its save was on its way: what the save did not hold stays kept. */
+function acceptElsewhere({ storage, accountId }: StudyDesk, sent: Sending, saved: SavedStudy): void {
+  const work = readWork(storage, saved.id, accountId.value ?? '');
+  if (!work || sameStudy(work.document, sent.body.document)) return forgetWork(storage, saved.id);
+  const document = takingIn(sent, saved)(work.document);
+  writeWork(storage, saved.id, {
+    ...work,
+    ...(document && { document, basedOn: saved.number }),
+    pending: null,
+  });
+}
+
+function accept(desk: StudyDesk, sent: Sending, saved: SavedStudy): void {
   if (desk.study.value?.id !== saved.id) return acceptElsewhere(desk, sent, saved);
-  desk.study.value = saved;
-  desk.basedOn.value = saved.number;
+  const { merged, ...study } = saved;
+  // What was changed meanwhile where the others had changed it too goes on from the old save: then the two meet.
+  if (desk.bench.rebase(takingIn(sent, saved))) desk.basedOn.value = saved.number;
+  desk.study.value = study;
+  desk.merged.value = merged;
   desk.sending.value = null;
   desk.failure.value = null;
   desk.failures.value = 0;

@@ -35,10 +35,32 @@ export const useStudyStore = defineStore('study', () => {
     forgetWorkOfOthers(desk.storage, accountId);
   }
 
-  const { study, status, problem, conflict, keptInBrowser, maySave, hasUnsaved, saveState, saveProblem } =
-    desk;
+  const {
+    study,
+    status,
+    problem,
+    conflict,
+    merged,
+    keptInBrowser,
+    maySave,
+    hasUnsaved,
+    saveState,
+    saveProblem,
+  } = desk;
   return {
-    ...{ study, status, problem, conflict, keptInBrowser, maySave, hasUnsaved, saveState, saveProblem, may },
+    ...{
+      study,
+      status,
+      problem,
+      conflict,
+      merged,
+      keptInBrowser,
+      maySave,
+      hasUnsaved,
+      saveState,
+      saveProblem,
+      may,
+    },
     open: (studyId: string) => open(desk, studyId),
     openDraft: () => openDraft(desk),
     save: () => flush(desk),

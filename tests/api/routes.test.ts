@@ -6,10 +6,12 @@ import * as annotationEndpoints from '#shared/contracts/annotations';
 import * as demoEndpoints from '#shared/contracts/demo';
 import * as docsEndpoints from '#shared/contracts/docs';
 import * as measureEndpoints from '#shared/contracts/measures';
+import * as shelfEndpoints from '#shared/contracts/shelf';
 import * as studyEndpoints from '#shared/contracts/studies';
+import * as versionEndpoints from '#shared/contracts/versions';
 import { createTestApp, type TestApp } from '../support/app';
 import { enter, somebody, type Somebody } from '../support/people';
-import { documentOf, makeStudy, saveOf, shareWith } from '../support/studies';
+import { documentOf, keepOnShelf, makeStudy, saveOf, shareWith, voicingOf } from '../support/studies';
 
 const KEY = '0b4b6c5e-7a53-4a39-9f25-3f0c6e6f3a11';
 const STUDY = '/api/studies/:studyId';
@@ -76,6 +78,52 @@ const GUARDED: readonly (readonly [Row, readonly number[]])[] = [
     [200, 403, 403, 404, 403, 401],
   ],
   [
+    ['POST', `${STUDY}/duplicates`, { requestKey: KEY }],
+    [200, 200, 200, 404, 403, 401],
+  ],
+  [
+    ['PUT', `${STUDY}/tags`, { tags: ['low'] }],
+    [200, 200, 200, 404, 403, 401],
+  ],
+  [
+    ['GET', '/api/study-filters'],
+    [200, 200, 200, 200, 403, 401],
+  ],
+  [
+    ['GET', '/api/deleted-studies'],
+    [200, 200, 200, 200, 403, 401],
+  ],
+  // Earlier thoughts are not shared with the study.
+  [
+    ['GET', `${STUDY}/versions`],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['GET', `${STUDY}/versions/:kind/:number`],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['PATCH', `${STUDY}/versions/:kind/:number`, { name: 'First try' }],
+    [200, 403, 403, 404, 403, 401],
+  ],
+  [
+    ['GET', '/api/shelf'],
+    [200, 200, 200, 200, 403, 401],
+  ],
+  [
+    ['POST', '/api/shelf', { name: 'Open fifth', voicing: voicingOf(), requestKey: KEY }],
+    [200, 200, 200, 200, 403, 401],
+  ],
+  // The voicing is the owner's: nobody else has a shelf with it.
+  [
+    ['PATCH', '/api/shelf/:voicingId', { name: 'Renamed' }],
+    [200, 404, 404, 404, 403, 401],
+  ],
+  [
+    ['DELETE', '/api/shelf/:voicingId'],
+    [200, 404, 404, 404, 403, 401],
+  ],
+  [
     ['GET', `${STUDY}/shares`],
     [200, 403, 403, 404, 403, 401],
   ],
@@ -121,8 +169,12 @@ async function setScene(): Promise<Scene> {
   await shareWith(owner, id, view.email, 'view');
   const share = await shareWith(owner, id, third.email, 'comment');
   const annotation = await third.send('POST', `/api/studies/${id}/annotations`, REMARK);
+  const voicing = await keepOnShelf(owner, 'Open fifth');
   const fill = (path: string) =>
     path
+      .replace(':voicingId', voicing.id)
+      .replace(':kind', 'accepted')
+      .replace(':number', '1')
       .replace(':studyId', id)
       .replace(':shareId', share.id)
       .replace(':annotationId', String(annotation.body.id));
@@ -143,7 +195,9 @@ test('when a contract has a route, then it is in the lists above, and nothing el
     demoEndpoints,
     docsEndpoints,
     measureEndpoints,
+    shelfEndpoints,
     studyEndpoints,
+    versionEndpoints,
   ];
   const contracts = modules
     .flatMap((module) => Object.values(module))

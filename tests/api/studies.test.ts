@@ -71,7 +71,7 @@ test('when studies are listed page by page, then own and received ones come newe
   while (next !== null) {
     const { body } = await ada.send('GET', `/api/studies?limit=2${next && `&after=${next}`}`);
     expect(body.studies.length).toBeLessThanOrEqual(2);
-    for (const { document, ...study } of body.studies) listed.push({ ...study, title: document.title });
+    listed.push(...body.studies);
     next = body.next;
   }
   expect(listed.map(({ title }) => title).sort()).toEqual(titles.sort());

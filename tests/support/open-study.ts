@@ -1,6 +1,6 @@
 import { createPinia, setActivePinia } from 'pinia';
 import type { Account } from '#shared/contracts/accounts';
-import type { StaleDetails, Study } from '#shared/contracts/studies';
+import type { Merged, SavedStudy, StaleDetails, Study } from '#shared/contracts/studies';
 import { newStudy, newVoice } from '#shared/study/new-study';
 import { studyDocumentSchema, type StudyDocument } from '#shared/study/study.document';
 import { changeChord } from '#shared/study/study.changes';
@@ -43,4 +43,9 @@ export function atTheDesk(account: Account | null = ADA) {
   const put = (...pitches: string[]) =>
     bench.change({ ...bench.study, chords: documentOf(...pitches).chords });
   return { session, bench, study, put };
+}
+
+/** The answer to a save. */
+export function savedOf(document: StudyDocument, number: number, merged: Merged | null = null): SavedStudy {
+  return { ...studyOf(document, number), merged };
 }

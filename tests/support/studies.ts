@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { shelvedChordSchema, type ShelfVoicing } from '#shared/contracts/shelf';
 import type { Study } from '#shared/contracts/studies';
 import { studyDocumentSchema, type StudyDocument } from '#shared/study/study.document';
 import type { Somebody } from './people';
@@ -42,4 +43,17 @@ export async function shareWith(owner: Somebody, studyId: string, email: string,
 /** What a page sends to save. */
 export function saveOf(document: StudyDocument, basedOn: number, requestKey: string = randomUUID()) {
   return { document, basedOn, requestKey };
+}
+
+/** What is kept on the shelf: the first chord of {@link documentOf}, under its settings. */
+export function voicingOf() {
+  const { chords, key, a4Hz, intonation, ensemble } = documentOf('Any');
+  return shelvedChordSchema.parse({ chord: chords[0], key, a4Hz, intonation, ensemble });
+}
+
+export async function keepOnShelf(owner: Somebody, name: string): Promise<ShelfVoicing> {
+  const body = { name, voicing: voicingOf(), requestKey: randomUUID() };
+  const answer = await owner.send('POST', '/api/shelf', body);
+  if (answer.status !== 200) throw new Error(`the voicing was not kept: ${JSON.stringify(answer.body)}`);
+  return answer.body;
 }

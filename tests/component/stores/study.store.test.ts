@@ -4,7 +4,7 @@ import { saveStudy } from '#shared/contracts/studies';
 import { emptyChord } from '#shared/study/new-study';
 import { forgetCsrfToken } from '@/api/csrf';
 import { readWork } from '@/stores/kept-work';
-import { atTheDesk, ADA, documentOf, staleOf, STUDY_ID, studyOf } from '../../support/open-study';
+import { atTheDesk, ADA, documentOf, savedOf, staleOf, STUDY_ID, studyOf } from '../../support/open-study';
 import { noAnswer, refusal, stubApi, type StubbedRequest } from '../../support/stubbed-api';
 
 const READ = `GET /api/studies/${STUDY_ID}`;
@@ -16,7 +16,7 @@ const sentIn = (request: StubbedRequest) => saveStudy.body.parse(request.body);
 /** Takes a save as the server does: under the next number. */
 const take = (request: StubbedRequest) => {
   const { document, basedOn } = sentIn(request);
-  return { body: studyOf(document, basedOn + 1) };
+  return { body: savedOf(document, basedOn + 1) };
 };
 const reads = (number = 1) => ({ body: studyOf(documentOf('C3'), number) });
 const kept = () => readWork(localStorage, STUDY_ID, ADA.id);
@@ -220,6 +220,54 @@ describe('a save over somebody’s newer one', () => {
       'saved',
       null,
     ]);
+  });
+});
+
+describe('a save that was merged with what others had saved', () => {
+  const MERGED = {
+    withNumber: 4,
+    savedByNames: ['Bea'],
+    chords: [{ change: 'added' as const, place: 2, name: null }],
+    settings: [],
+    reordered: false,
+  };
+  const theirs = documentOf('G2').chords.map((chord) => ({ ...chord, id: 'chord-two' }));
+  /** As the server answers: what was sent, with the chord that somebody else had added. */
+  const merge = (request: StubbedRequest) => {
+    const { document } = sentIn(request);
+    return { body: savedOf({ ...document, chords: [...document.chords, ...theirs] }, 5, MERGED) };
+  };
+  const pitches = (document: { chords: readonly { voices: readonly { pitch: string }[] }[] }) =>
+    document.chords.map(({ voices }) => voices[0]?.pitch);
+
+  it('when it is answered, then the bench has both, saved, and it is told', async () => {
+    const { study, bench, put, saves } = await opened({ [SAVE]: [merge, take] });
+    put('D3');
+    await study.save();
+    expect(pitches(bench.study)).toEqual(['D3', 'G2']);
+    expect([study.saveState, study.study?.number, study.merged]).toEqual(['saved', 5, MERGED]);
+    expect(saves()).toHaveLength(1);
+  });
+
+  it('when notes were put in meanwhile, then they stay, and are saved on top of the merged save', async () => {
+    const { study, bench, put, saves } = await opened({ [SAVE]: [merge, take] });
+    put('D3');
+    const saving = study.save();
+    put('E3');
+    await saving;
+    expect(pitches(bench.study)).toEqual(['E3', 'G2']);
+    expect(saves().map(({ basedOn, document }) => [basedOn, pitches(document)])).toEqual([
+      [1, ['D3']],
+      [5, ['E3', 'G2']],
+    ]);
+  });
+
+  it('when one’s change is undone, then the others’ stays', async () => {
+    const { study, bench, put } = await opened({ [SAVE]: [merge, take] });
+    put('D3');
+    await study.save();
+    bench.undo();
+    expect(pitches(bench.study)).toEqual(['C3', 'G2']);
   });
 });
 
