@@ -1,33 +1,36 @@
+import { refDebounced } from '@vueuse/core';
 import { computed, ref, shallowRef, watch } from 'vue';
 import { ApiError } from '@/api/api-error';
 import type { LoadStatus } from '@/api/load-status';
 import type { VoicingGroup, VoicingSource } from '@/composables/voicing-sources';
 
-/** As many pages as are read by themselves while somebody searches. */
-const MOST_PAGES = 20;
+/** A search is asked for once the typing has rested. */
+const REST_MS = 250;
 
-/** The groups of a source, page by page; a search reads on until the end. */
+/** The groups of a source, page by page, of all or of what is searched for. */
 export function useSourcePages(source: () => VoicingSource) {
   const groups = shallowRef<readonly VoicingGroup[]>([]);
   const next = ref<string | null>(null);
   const status = ref<LoadStatus>('idle');
   const trouble = ref<string | null>(null);
   const query = ref('');
-  let pages = 0;
+  const rested = refDebounced(query, REST_MS);
+  /** What is being read: an answer to an older question is let fall. */
+  let question = 0;
 
-  async function read(from: VoicingSource, after: string | null): Promise<void> {
+  async function read(after: string | null): Promise<void> {
+    const mine = (question += 1);
     status.value = 'loading';
     trouble.value = null;
     try {
-      const page = await from.page(after);
-      if (from !== source()) return;
-      pages += 1;
-      groups.value = [...groups.value, ...page.groups];
+      const page = await source().page(rested.value.trim(), after);
+      if (mine !== question) return;
+      groups.value = after === null ? page.groups : [...groups.value, ...page.groups];
       next.value = page.next;
       status.value = 'ready';
     } catch (error) {
       if (!(error instanceof ApiError)) throw error;
-      if (from !== source()) return;
+      if (mine !== question) return;
       trouble.value = error.message;
       status.value = 'error';
     }
@@ -36,24 +39,15 @@ export function useSourcePages(source: () => VoicingSource) {
   function begin(): void {
     groups.value = [];
     next.value = null;
-    query.value = '';
-    pages = 0;
-    status.value = 'idle';
-    if (source().unavailable() === null) void read(source(), null);
+    if (source().unavailable() === null) void read(null);
+    else status.value = 'idle';
   }
 
   function more(): void {
-    if (status.value !== 'loading' && next.value !== null) void read(source(), next.value);
+    if (status.value !== 'loading' && next.value !== null) void read(next.value);
   }
 
-  const words = computed(() => query.value.trim().toLocaleLowerCase());
-  const found = computed(() =>
-    groups.value.filter(({ title }) => title.toLocaleLowerCase().includes(words.value)),
-  );
-  watch(source, begin, { immediate: true });
-  watch([words, status], () => {
-    if (words.value !== '' && status.value === 'ready' && pages < MOST_PAGES) more();
-  });
-
-  return { found, query, status, trouble, hasMore: computed(() => next.value !== null), more, again: begin };
+  watch(source, () => (query.value = ''));
+  watch([source, rested], begin, { immediate: true });
+  return { groups, query, status, trouble, hasMore: computed(() => next.value !== null), more, again: begin };
 }

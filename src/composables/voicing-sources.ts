@@ -25,13 +25,14 @@ export interface VoicingSource {
   readonly label: string;
   /** Why it has nothing for this reader; `null` where it may have something. */
   unavailable(): string | null;
-  /** Whether its groups can be searched by title. */
+  /** Whether its groups can be searched. */
   readonly searchable: boolean;
   /**
+   * @param search words to find groups by; empty for all
    * @param after the previous page's `next`
    * @throws ApiError where it cannot be asked
    */
-  page(after: string | null): Promise<VoicingPage>;
+  page(search: string, after: string | null): Promise<VoicingPage>;
   /**
    * Opens what a link names.
    * @returns `null` where the place is none of this source's, or nothing is there any more

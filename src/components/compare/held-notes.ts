@@ -34,6 +34,8 @@ export interface Motion {
   readonly y1: number;
   readonly x2: number;
   readonly y2: number;
+  /** So short that it stands beside the note, not between the two. */
+  readonly near: boolean;
 }
 
 export interface HeldMarks {
@@ -61,17 +63,11 @@ const TOKEN_WIDTH = 13;
 function motionOf(change: NoteChange, from: LaneNote, to: LaneNote): readonly Motion[] {
   const down = Math.sign(to.y - from.y);
   const isFar = Math.abs(to.y - from.y) > 2 * TOKEN_HALF || Math.abs(to.left - from.left) > TOKEN_WIDTH;
-  if (!isFar || !change.now) return [];
-  return [
-    {
-      id: change.now.id,
-      section: change.now.section,
-      x1: from.left,
-      y1: from.y + down * (TOKEN_HEIGHT / 2),
-      x2: to.left,
-      y2: to.y - down * TOKEN_HALF,
-    },
-  ];
+  if (!change.now) return [];
+  const { id, section } = change.now;
+  if (!isFar) return [{ id, section, x1: to.left, y1: from.y, x2: to.left, y2: to.y, near: true }];
+  const [y1, y2] = [from.y + down * (TOKEN_HEIGHT / 2), to.y - down * TOKEN_HALF];
+  return [{ id, section, x1: from.left, y1, x2: to.left, y2, near: false }];
 }
 
 /** The marks that lay the held voicing over the lanes of the one now. */
