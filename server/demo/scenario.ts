@@ -53,7 +53,7 @@ const LOW_THIRD: DemoStudy = {
     {
       by: 'isolde',
       chord: 1,
-      text: 'Nothing stands under the printed limit any more, and six basses on C2 still thicken it. Play both and decide whom you believe.',
+      text: 'Nothing stands under the printed limit any more, and the index has come down to where the limits lie: just bearable, by both. Play both and decide whether you agree.',
     },
     { by: 'petra', chord: 3, text: 'Is the octave too empty in the middle for a final chord?' },
   ],
