@@ -21,6 +21,8 @@ export interface Settings {
   readonly publicUrl: string;
   /** How many proxies stand before the program. */
   readonly trustProxy: number;
+  /** How many processes serve. */
+  readonly workers: number;
   readonly logLevel: (typeof LOG_LEVELS)[number];
   /** As `Name <address>` or an address alone. */
   readonly mailFrom: string;
@@ -50,6 +52,7 @@ const DEMO_SENDER = 'Siltline <siltline@localhost>';
 const DEFAULT_PORT = '3000';
 const MAX_PORT = 65_535;
 const MAX_PROXIES = 16;
+const MAX_WORKERS = 64;
 /** 256 bits in base64, at least: as long as the SHA-256 that signs the cookie. */
 const MIN_SECRET = 32;
 
@@ -116,6 +119,7 @@ const variablesSchema = z.object({
     .optional(),
   SESSION_SECRET: z.string().min(MIN_SECRET, `must have at least ${MIN_SECRET} characters`).optional(),
   TRUST_PROXY: wholeNumber(0, MAX_PROXIES).prefault('0'),
+  WORKERS: wholeNumber(1, MAX_WORKERS).prefault('1'),
   LOG_LEVEL: z.enum(LOG_LEVELS, `must be one of ${LOG_LEVELS.join(', ')}`).default('info'),
 });
 type Variables = z.infer<typeof variablesSchema>;
@@ -179,6 +183,7 @@ function settingsOf(mode: Mode, given: Variables): Settings {
     dataDir: resolve(given.DATA_DIR),
     publicUrl: given.PUBLIC_URL ?? `http://localhost:${given.PORT}`,
     trustProxy: given.TRUST_PROXY,
+    workers: given.WORKERS,
     logLevel: given.LOG_LEVEL,
     mailFrom: (inEarnest ? given.MAIL_FROM : undefined) ?? DEMO_SENDER,
     database: given.DATABASE_URL,

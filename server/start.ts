@@ -1,12 +1,15 @@
+import type { Logger } from 'pino';
 import { createApp } from '#server/app';
 import { composeDeps } from '#server/compose';
 import { readSettings, SettingsError, type Settings } from '#server/env';
 import { describeError } from '#server/http/describe-error';
-import { createClosing } from '#server/setup/closing';
+import { createClosing, type Closing } from '#server/setup/closing';
 import { CannotStart } from '#server/setup/data-folder';
+import { layGround, type Ground } from '#server/setup/ground';
 import { leaseBuild } from '#server/setup/lease';
 import { checkAddress, closeServer, listen } from '#server/setup/listen';
 import { createLogger } from '#server/setup/logger';
+import { isServerProcess, receiveGround, startProcesses } from '#server/setup/processes';
 import { untilAskedToStop } from '#server/setup/signals';
 
 /** Requests under way are given so long to finish; the whole stop then stays within about ten seconds. */
@@ -21,6 +24,21 @@ function greeting({ mode, host, port, publicUrl, withoutEffect }: Settings): str
   return lines.join('\n');
 }
 
+async function serve(settings: Settings, ground: Ground, log: Logger, closing: Closing): Promise<void> {
+  const deps = composeDeps(settings, ground, log, closing);
+  const server = await listen(createApp(deps), settings.host, settings.port);
+  closing.add(() => closeServer(server, PATIENCE_MS));
+}
+
+/** Makes what all processes share, then serves: in this process, or in several of their own. */
+async function begin(settings: Settings, log: Logger, closing: Closing): Promise<void> {
+  await checkAddress(settings.host, settings.port);
+  const ground = await layGround(settings, log, closing);
+  if (settings.workers === 1) await serve(settings, ground, log, closing);
+  else closing.add(await startProcesses(settings.workers, ground, log));
+  console.log(greeting(settings));
+}
+
 /** Runs until it is asked to stop. @throws whatever keeps it from starting. */
 async function run(settings: Settings): Promise<void> {
   const log = createLogger(settings);
@@ -28,11 +46,8 @@ async function run(settings: Settings): Promise<void> {
   const closing = createClosing();
   try {
     closing.add(leaseBuild());
-    await checkAddress(settings.host, settings.port);
-    const deps = await composeDeps(settings, log, closing);
-    const server = await listen(createApp(deps), settings.host, settings.port);
-    closing.add(() => closeServer(server, PATIENCE_MS));
-    console.log(greeting(settings));
+    if (isServerProcess) await serve(settings, await receiveGround(), log, closing);
+    else await begin(settings, log, closing);
     log.info({ signal: await stop }, 'stopping');
   } finally {
     await closing.run((error) => log.error({ err: error }, 'something could not be closed in order'));

@@ -61,7 +61,12 @@ async function seedStudy(
 }
 
 /** Fills an empty database with the scenario, whole or not at all. No mail is written. */
-export async function seedDemo({ db, passwords, clock, log }: Deps): Promise<void> {
+export async function seedDemo({
+  db,
+  passwords,
+  clock,
+  log,
+}: Pick<Deps, 'db' | 'passwords' | 'clock' | 'log'>): Promise<void> {
   const now = clock();
   const passwordHash = await passwords.hash(DEMO_PASSWORD);
   await inTransaction(db, async (tx) => {

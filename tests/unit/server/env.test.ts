@@ -33,6 +33,7 @@ describe('with nothing set', () => {
       dataDir: resolve('.data'),
       publicUrl: 'http://localhost:3000',
       trustProxy: 0,
+      workers: 1,
       logLevel: 'info',
       smtpUrl: undefined,
       database: undefined,
