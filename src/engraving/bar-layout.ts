@@ -123,10 +123,11 @@ function eventsOf(bar: Bar, staff: number, xs: readonly number[], middle: number
 
 function spansOf(bar: Bar, xs: readonly number[], leads: readonly number[], width: number): BarSpan[] {
   const spans: BarSpan[] = [];
+  const edge = (index: number): number => (xs[index] ?? 0) - (leads[index] ?? 0) - BEFORE_BAR_LINE;
   bar.moments.forEach(({ chordId, begins }, index) => {
     if (chordId === null) return;
-    const from = (xs[index] ?? 0) - (leads[index] ?? 0);
-    const next = index + 1 < xs.length ? (xs[index + 1] ?? 0) - (leads[index + 1] ?? 0) : width;
+    const from = edge(index);
+    const next = index + 1 < xs.length ? edge(index + 1) : width;
     const last = spans.at(-1);
     if (last?.chordId === chordId && begins === null) spans[spans.length - 1] = { ...last, to: next };
     else spans.push({ chordId, from, to: next, begins: begins !== null });

@@ -1,10 +1,12 @@
 import plexItalicUrl from '@fontsource/ibm-plex-sans/files/ibm-plex-sans-latin-400-italic.woff2?url';
 import plexBoldUrl from '@fontsource/ibm-plex-sans/files/ibm-plex-sans-latin-600-normal.woff2?url';
+import plexUrl from '@fontsource/ibm-plex-sans/files/ibm-plex-sans-latin-400-normal.woff2?url';
 import accidentalsUrl from '@fontsource/noto-music/files/noto-music-music-400-normal.woff2?url';
 import { ACCIDENTALS_FONT, MUSIC_FONT, musicFontUrl } from '@/engraving/music-font';
 
 const FACES = [
   { family: MUSIC_FONT, url: musicFontUrl, weight: 400, style: 'normal' },
+  { family: 'IBM Plex Sans', url: plexUrl, weight: 400, style: 'normal' },
   { family: 'IBM Plex Sans', url: plexItalicUrl, weight: 400, style: 'italic' },
   { family: 'IBM Plex Sans', url: plexBoldUrl, weight: 600, style: 'normal' },
 ] as const;
