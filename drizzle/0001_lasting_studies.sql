@@ -36,10 +36,4 @@ CREATE INDEX `saves_age` ON `saves` (`kind`,`saved_at`);--> statement-breakpoint
 CREATE INDEX `studies_owner_title` ON `studies` (`owner_id`,`deleted_at`,`title`,`id`);--> statement-breakpoint
 CREATE INDEX `studies_owner_cloudiest` ON `studies` (`owner_id`,`deleted_at`,`cloudiest`,`id`);--> statement-breakpoint
 CREATE INDEX `studies_summary_due` ON `studies` (`summary_due`);--> statement-breakpoint
-CREATE INDEX `studies_deleted` ON `studies` (`deleted_at`);--> statement-breakpoint
-UPDATE `studies` INNER JOIN `saves` ON `saves`.`study_id` = `studies`.`id` AND `saves`.`kind` = 'accepted' AND `saves`.`number` = `studies`.`newest_number`
-SET `studies`.`title` = JSON_VALUE(`saves`.`document`, '$.title'),
-	`studies`.`about` = COALESCE(JSON_VALUE(`saves`.`document`, '$.about'), ''),
-	`studies`.`key_tonic` = JSON_VALUE(`saves`.`document`, '$.key.tonic'),
-	`studies`.`key_mode` = JSON_VALUE(`saves`.`document`, '$.key.mode'),
-	`studies`.`chord_count` = JSON_LENGTH(`saves`.`document`, '$.chords');
+CREATE INDEX `studies_deleted` ON `studies` (`deleted_at`);
