@@ -27,8 +27,6 @@ const PAIR_CENTS = [
   { least: 3, most: 5 },
   { least: 6, most: 9 },
 ] as const;
-/** Two sections in unison drift apart, and stay within a cent of their pitch. */
-const MOST_MIDDLE_CENTS: Cents = 0.8;
 /** Nobody in a section begins exactly together. Chosen: well under what is heard as two attacks. */
 const LATE_SECONDS = { least: 0.004, most: 0.02 } as const;
 
@@ -64,15 +62,26 @@ export function playersOf(players: number, fundamentalHz: Hertz, seed: number): 
   if (players <= 1) return [{ cents: 0, share: 1, laterPeriods: 0 }];
   const draw = drawsOf(seed);
   const begins = players < MANY ? ONE_PAIR_BEGINS : TWO_PAIRS_BEGIN;
-  const middle = { cents: (2 * draw() - 1) * MOST_MIDDLE_CENTS, share: MIDDLE_SHARE, laterPeriods: 0 };
+  const middle = { cents: 0, share: MIDDLE_SHARE, laterPeriods: 0 };
   const share = Math.sqrt((1 - MIDDLE_SHARE ** 2) / (2 * begins.length));
   const pairs = begins.flatMap((begin, index) => {
     const away = between(PAIR_CENTS[index] ?? PAIR_CENTS[0], draw());
     const periods = Math.ceil(between(LATE_SECONDS, draw()) * fundamentalHz);
     return [
-      { cents: middle.cents + away, share, laterPeriods: periods + begin },
-      { cents: middle.cents - away, share, laterPeriods: periods - begin },
+      { cents: away, share, laterPeriods: periods + begin },
+      { cents: -away, share, laterPeriods: periods - begin },
     ];
   });
   return [middle, ...pairs];
+}
+
+/**
+ * @param id of a voice
+ * @returns a whole number for {@link playersOf}, the same for the same id
+ * @example seedOf('AB') // 65 * 31 + 66
+ */
+export function seedOf(id: string): number {
+  const BASE = 31;
+  const BOUND = 1_000_003;
+  return [...id].reduce((sum, letter) => (sum * BASE + letter.charCodeAt(0)) % BOUND, 0);
 }

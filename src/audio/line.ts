@@ -1,9 +1,8 @@
 import { connect, Gain, type BaseContext } from 'tone';
-import { playersOf, type Player } from '@/audio/ensemble';
+import { playersOf, seedOf, type Player } from '@/audio/ensemble';
 import { CROSSFADE, type Envelope } from '@/audio/envelope';
 import { strokesFor } from '@/audio/tremolo';
 import type { ReadyWave, WaveStore } from '@/audio/wave-store';
-import { seedOf } from '@/audio/waves';
 import type { VoiceSound } from '#shared/voicing/analysis';
 
 /** One voice that sounds. Times are those of the audio clock, in seconds. */
@@ -79,9 +78,8 @@ class Desks {
   /** Whole periods of the first player from its beginning on, so that the others' waves stand to it as planned. */
   laterSeconds({ laterPeriods }: Player, atLeast: number): number {
     const [first] = this.sound.partials;
-    const [middle] = this.players;
-    if (!first || !middle) return 0;
-    const periodsPerSecond = (first.frequencyHz / first.n) * 2 ** (middle.cents / 1200);
+    if (!first) return 0;
+    const periodsPerSecond = first.frequencyHz / first.n;
     return (laterPeriods + Math.ceil(Math.max(atLeast, 0) * periodsPerSecond)) / periodsPerSecond;
   }
 

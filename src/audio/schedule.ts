@@ -29,6 +29,14 @@ export function strikeSchedule(sounds: readonly VoiceSound[]): readonly TimedSou
   return [{ key: 'chord', startSeconds: 0, seconds: STRIKE_SECONDS, sounds }];
 }
 
+/** A held chord lasts so long in a file. Chosen. */
+export const HOLD_SECONDS = 10;
+
+/** @returns the chord once, held */
+export function holdSchedule(sounds: readonly VoiceSound[]): readonly TimedSound[] {
+  return [{ key: 'chord', startSeconds: 0, seconds: HOLD_SECONDS, sounds }];
+}
+
 /**
  * The chord built up from the bottom: one note joins after the other, and all end together.
  * @returns one entry for each voice, the lowest first

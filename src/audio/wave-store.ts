@@ -1,5 +1,5 @@
 import type { BaseContext } from 'tone';
-import { seedOf, wavesOf, type WaveKind } from '@/audio/waves';
+import { isTurned, wavesOf, type WaveKind } from '@/audio/waves';
 import type { VoiceSound } from '#shared/voicing/analysis';
 import type { Hertz } from '#shared/units';
 
@@ -20,9 +20,9 @@ export interface WaveStore {
 /** Enough for four chords of forty voices; the ones not used for longest give way. */
 const MOST_KEPT = 320;
 
-function keyOf({ id, partials }: VoiceSound, kind: WaveKind): string {
+function keyOf({ section, partials }: VoiceSound, kind: WaveKind): string {
   const lines = partials.map(({ n, frequencyHz, levelDb }) => `${n},${frequencyHz},${levelDb}`);
-  return `${kind} ${id} ${lines.join(' ')}`;
+  return `${kind} ${isTurned(section)} ${lines.join(' ')}`;
 }
 
 /** Makes the store of one audio context. */
@@ -46,10 +46,12 @@ export function createWaveStore(context: BaseContext): WaveStore {
       const key = keyOf(sound, kind);
       const known = kept.get(key);
       if (known) return keep(key, known);
-      const waves = wavesOf(sound.partials, seedOf(sound.id), kind).map(({ fundamentalHz, real, imag }) => ({
-        fundamentalHz,
-        periodic: make(real, imag),
-      }));
+      const waves = wavesOf(sound.partials, isTurned(sound.section), kind).map(
+        ({ fundamentalHz, real, imag }) => ({
+          fundamentalHz,
+          periodic: make(real, imag),
+        }),
+      );
       return keep(key, waves);
     },
     named(name, real, imag) {

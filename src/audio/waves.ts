@@ -1,4 +1,5 @@
 import { amplitudeOf } from '@/audio/levels';
+import { SECTIONS, type Section } from '#shared/strings/sections';
 import type { Partial } from '#shared/voicing/analysis';
 import type { Hertz } from '#shared/units';
 
@@ -13,13 +14,13 @@ export interface Wave {
 
 /** Partials nearer to their multiple than this are of one series: a fiftieth of a cent. */
 const SAME_SERIES = 1e-5;
-/** Irrational steps, so that no two partials and no two voices stand in a simple relation of phase. */
+/** An irrational step, so that no two partials stand in a simple relation of phase. */
 const PHASE_STEP = Math.SQRT2 - 1;
-const VOICE_STEP = (Math.sqrt(5) - 1) / 2;
+const SIGN_STEP = (Math.sqrt(5) - 1) / 2;
 
 /** Phases that grow with the square of n spread the peaks over the period: little headroom is lost. */
-function phaseOf(n: number, seed: number): number {
-  return 2 * Math.PI * ((PHASE_STEP * n * n + VOICE_STEP * n * seed) % 1);
+function phaseOf(n: number): number {
+  return 2 * Math.PI * ((PHASE_STEP * n * n) % 1);
 }
 
 function inOneSeries(a: Partial, b: Partial): boolean {
@@ -33,17 +34,17 @@ export type WaveKind = 'middle' | 'others';
 const QUARTER_TURN = Math.PI / 2;
 
 /** The others stand before or behind the middle, from partial to partial in no simple order. */
-function turnOf(n: number, seed: number, kind: WaveKind): number {
+function turnOf(n: number, kind: WaveKind): number {
   if (kind === 'middle') return 0;
-  return Math.cos(phaseOf(n, seed + 1)) < 0 ? -QUARTER_TURN : QUARTER_TURN;
+  return (SIGN_STEP * n) % 1 < 1 / 2 ? -QUARTER_TURN : QUARTER_TURN;
 }
 
-function waveOf(series: readonly Partial[], fundamentalHz: Hertz, seed: number, kind: WaveKind): Wave {
+function waveOf(series: readonly Partial[], fundamentalHz: Hertz, turned: boolean, kind: WaveKind): Wave {
   const length = series.reduce((most, { n }) => Math.max(most, n), 0) + 1;
   const wave = { fundamentalHz, real: new Float32Array(length), imag: new Float32Array(length) };
   for (const { n, levelDb } of series) {
     const amplitude = amplitudeOf(levelDb);
-    const phase = phaseOf(n, seed) + turnOf(n, seed, kind);
+    const phase = phaseOf(n) + turnOf(n, kind) + (turned ? QUARTER_TURN : 0);
     wave.real[n] = amplitude * Math.cos(phase);
     wave.imag[n] = amplitude * Math.sin(phase);
   }
@@ -55,14 +56,15 @@ function waveOf(series: readonly Partial[], fundamentalHz: Hertz, seed: number, 
  * and make one wave, one oscillator; a partial that is no exact multiple gets a wave of its own, so that any
  * list of partials sounds as it stands.
  * @param partials n ≥ 1, frequencies in hertz > 0
- * @param seed any whole number ≥ 0; voices with different ones are not in phase
+ * @param turned a quarter of a period later in every partial: two voices in unison of which one is turned add
+ *   their energies, neither strengthening nor extinguishing each other
  * @param kind whose wave: the middle's, or that of the others in the section
  * @returns one wave for each harmonic series among the partials; amplitudes against 0 dB
- * @example wavesOf([{ n: 1, frequencyHz: 100, levelDb: 0 }, { n: 2, frequencyHz: 201, levelDb: 0 }], 0).length // 2
+ * @example wavesOf([{ n: 1, frequencyHz: 100, levelDb: 0 }, { n: 2, frequencyHz: 201, levelDb: 0 }], false).length // 2
  */
 export function wavesOf(
   partials: readonly Partial[],
-  seed: number,
+  turned: boolean,
   kind: WaveKind = 'middle',
 ): readonly Wave[] {
   const series: Partial[][] = [];
@@ -73,17 +75,15 @@ export function wavesOf(
   }
   return series.flatMap((members) => {
     const [first] = members;
-    return first ? [waveOf(members, first.frequencyHz / first.n, seed, kind)] : [];
+    return first ? [waveOf(members, first.frequencyHz / first.n, turned, kind)] : [];
   });
 }
 
 /**
- * @param id of a voice
- * @returns a whole number for {@link wavesOf}, the same for the same id
- * @example seedOf('AB') // 65 * 31 + 66
+ * Whether a section's waves are turned by a quarter: neighbours in the score, who double each other most, never
+ * stand alike.
+ * @example isTurned('viola') !== isTurned('cello') // true
  */
-export function seedOf(id: string): number {
-  const BASE = 31;
-  const BOUND = 1_000_003;
-  return [...id].reduce((sum, letter) => (sum * BASE + letter.charCodeAt(0)) % BOUND, 0);
+export function isTurned(section: Section): boolean {
+  return SECTIONS.indexOf(section) % 2 === 1;
 }
