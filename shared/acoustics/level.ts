@@ -25,6 +25,7 @@ export function playersGain(players: number): Decibels {
  * @param players 1 or more
  * @returns decibels; 0 is one violinist at mf
  * @source shared/data/player-levels
+ * @example nominalLevel('violin', 'mf', ordinary, 1) // 0
  */
 export function nominalLevel(
   instrument: Instrument,
@@ -40,6 +41,7 @@ export function nominalLevel(
  * How much more than the bottom of the spectrum a frequency grows with the dynamic.
  * @returns decibels, 0 at mf
  * @source J. Meyer 2009, from memory
+ * @example brightnessGain('f', 3000) // 0.5
  */
 export function brightnessGain(dynamic: Dynamic, frequencyHz: Hertz): Decibels {
   const inside = Math.min(Math.max(frequencyHz, BRIGHTNESS_BOTTOM_HZ), BRIGHTNESS_TOP_HZ);

@@ -22,6 +22,7 @@ export interface ToneSource {
  * dynamic and body.
  * @returns partials whose levels leave the voice's nominal level out: add it
  * @source a bowed string is harmonic (stick-slip motion locks its modes): Cremer, The Physics of the Violin
+ * @example spectrumOf({ instrument: 'cello', technique, dynamic: 'mf', f0Hz: 220 })[1]?.frequencyHz // 440
  */
 export function spectrumOf({ instrument, technique, dynamic, f0Hz }: ToneSource): readonly Partial[] {
   const partials: Partial[] = [];

@@ -33,7 +33,10 @@ const HARMONIC_LEVEL_DB = -6;
 const TASTO_LEVEL_DB = -2;
 const DB_PER_AMPLITUDE_DECADE = 20;
 
-/** @returns how many partials a technique sounds: a harmonic has fewer */
+/**
+ * @returns how many partials a technique sounds: a harmonic has fewer
+ * @example partialCount({ ...ordinary, harmonic: 'natural' }) // 12
+ */
 export function partialCount(technique: Technique): number {
   return technique.harmonic === 'none' ? ALL_PARTIALS : HARMONIC_PARTIALS;
 }
@@ -53,7 +56,10 @@ export function excitationLevel(technique: Technique, n: number, frequencyHz: He
   return source + harmonic + (technique.mute ? muteGain(frequencyHz) : 0);
 }
 
-/** @returns level of a technique as a whole, against ordinary bowing at the same dynamic; decibels */
+/**
+ * @returns level of a technique as a whole, against ordinary bowing at the same dynamic; decibels
+ * @example techniqueLevel(ordinary) // 0
+ */
 export function techniqueLevel({ contact, mute, stroke, harmonic }: Technique): Decibels {
   return (
     (mute ? MUTE_LEVEL_DB : 0) +

@@ -50,6 +50,7 @@ export function harmonicPartials(
 /**
  * Adds up a measure of two tones over all pairs of partials, each pair once.
  * @param contribution of a pair, the lower partial first
+ * @example sumOverPairs(threeTones, () => 1) // 3
  */
 export function sumOverPairs(
   partials: readonly PureTone[],

@@ -28,7 +28,10 @@ export interface HeardPartials {
   readonly above: Uint8Array;
 }
 
-/** @param voices as they sound */
+/**
+ * @param voices as they sound
+ * @example hearPartials([cello, viola]).starts // [0, 32, 64]
+ */
 export function hearPartials(voices: readonly Pick<VoiceSound, 'partials'>[]): HeardPartials {
   const starts = [0];
   for (const { partials } of voices) starts.push((starts.at(-1) ?? 0) + partials.length);
@@ -59,7 +62,10 @@ function bandOf(frequencyHz: Hertz): number {
   return Math.min(Math.floor(erbRate(frequencyHz)), MOST_BANDS - 1);
 }
 
-/** @returns whether a partial is heard beside the loudest that could mask it in its band */
+/**
+ * @returns whether a partial is heard beside the loudest that could mask it in its band
+ * @example isHeard(heard, 0, 20 + level) // false: masked
+ */
 export function isHeard({ levels, above }: HeardPartials, place: number, masker: Decibels): boolean {
   return above[place] === 1 && masker - (levels[place] ?? 0) < MASKING;
 }

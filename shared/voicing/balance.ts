@@ -39,6 +39,7 @@ const DB_PER_POWER_DECADE = 10;
  * @param voices as they sound
  * @param heard the same voices' partials, where they are at hand
  * @returns voices in the order given; tones in the order of their first voice
+ * @example balanceOf([]) // { voices: [], tones: [] }
  */
 export function balanceOf(
   voices: readonly VoiceSound[],

@@ -24,6 +24,7 @@ export interface FullAnalysis extends ChordAnalysis {
  * and which single moves would clear it.
  * @param chord 0 to 40 voices
  * @param settings what the sound depends on besides
+ * @example fullAnalysis(chord, settings).muddiness // the same as of analyseChord
  */
 export function fullAnalysis(chord: Chord, settings: SoundSettings): FullAnalysis {
   const analysis = analyseChord(chord, settings);

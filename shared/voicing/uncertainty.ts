@@ -28,7 +28,10 @@ export function bandOf(index: number): IndexBand {
   };
 }
 
-/** @returns half the width of an index's band, points */
+/**
+ * @returns half the width of an index's band, points
+ * @example uncertaintyOf(0) // 0
+ */
 export function uncertaintyOf(index: number): number {
   const { low, high } = bandOf(index);
   return (high - low) / 2;
@@ -37,6 +40,7 @@ export function uncertaintyOf(index: number): number {
 /**
  * Whether two indices differ clearly.
  * @returns false where they are less than a point apart, or their bands overlap by more than half of the narrower
+ * @example differClearly(50, 50.9) // false
  */
 export function differClearly(a: number, b: number): boolean {
   if (Math.abs(a - b) < LEAST_DIFFERENCE) return false;

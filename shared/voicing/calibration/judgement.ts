@@ -120,6 +120,7 @@ function largestRipple(density: (voices: readonly MuddinessVoice[]) => number): 
 /**
  * How far an ordering holds.
  * @returns 1 where just far enough: a point of the index, or 2 % of ρ where both are over 90
+ * @example orderingMargin(0.2, 0.1, 0.1) // 25: an index of 75 against 50
  */
 export function orderingMargin(muddier: number, clearer: number, threshold: number): number {
   const a = indexOf(muddier, threshold);

@@ -35,6 +35,7 @@ export function limitCurves(
  * @param curve its lower notes a semitone apart
  * @param threshold T
  * @returns a MIDI number between the keys, interpolated in log ρ; null where ρ never falls through
+ * @example limitOnCurve({ lowest: 40, logDensity: [1, -1] }, 1) // 40.5
  */
 export function limitOnCurve(
   { lowest, logDensity }: Pick<LimitCurve, 'lowest' | 'logDensity'>,
@@ -50,7 +51,10 @@ export function limitOnCurve(
   return null;
 }
 
-/** @returns semitones from a limit to the nearest published variant of it; 0 within their spread */
+/**
+ * @returns semitones from a limit to the nearest published variant of it; 0 within their spread
+ * @example fromNearestVariant(38, fifth) // 1: the variants of the fifth go up to C#2, 37
+ */
 export function fromNearestVariant(midi: Midi, { spread }: LowIntervalLimit): number {
   return midi - Math.min(Math.max(midi, spread.low), spread.high);
 }

@@ -31,8 +31,14 @@ const LOWEST_LOG = -6;
 const LOG_STEP = 0.01;
 const LOG_STEPS = 600;
 
-/** @returns what the limits cost: the squares of their distances from the variants and, less, from the chart */
-export function limitCost({ rmsFromChart, rmsFromVariant }: LimitFit): number {
+/**
+ * @returns what the limits cost: the squares of their distances from the variants and, less, from the chart
+ * @example limitCost({ rmsFromVariant: 1, rmsFromChart: 2 }) // 2
+ */
+export function limitCost({
+  rmsFromChart,
+  rmsFromVariant,
+}: Pick<LimitFit, 'rmsFromChart' | 'rmsFromVariant'>): number {
   return rmsFromVariant ** 2 + CHART_PART * rmsFromChart ** 2;
 }
 

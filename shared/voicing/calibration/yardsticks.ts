@@ -25,7 +25,10 @@ const C2: Midi = 36;
 const C3: Midi = 48;
 const C4: Midi = 60;
 
-/** The section that takes a note where a yardstick names none: basses, cellos, violas, violins by octaves. */
+/**
+ * The section that takes a note where a yardstick names none: basses, cellos, violas, violins by octaves.
+ * @example sectionFor(36) // 'cello': C2
+ */
 export function sectionFor(midi: Midi): Section {
   if (midi < C2) return 'doubleBass';
   if (midi < C3) return 'cello';
@@ -82,6 +85,7 @@ export function scoreVoicing(
  * A voicing dealt as an orchestra deals it, from the bottom with the basses; notes of one section share its
  * players.
  * @param midi rising
+ * @example dealtVoicing([36, 43])[0]?.key // 'doubleBass ordinary mf 65.4…'
  */
 export function dealtVoicing(
   midi: readonly Midi[],

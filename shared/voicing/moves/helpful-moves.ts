@@ -23,6 +23,7 @@ const LEAST_SHARE = 0.05;
  * @param analysis of this chord, where it is at hand
  * @returns at most eight, none whose difference is not clear: first those that keep every chord tone, then those
  *   that lose one, the most helpful first among each
+ * @example helpfulMoves(chordOfOneVoice, settings) // []
  */
 export function helpfulMoves(
   chord: Chord,

@@ -40,7 +40,10 @@ export function lostBy(voices: readonly Voice[], move: Move): string | null {
   return voices.find(({ pitch }) => !kept.has(pitchClass(pitch)))?.pitch ?? null;
 }
 
-/** The voices of a chord after a move. */
+/**
+ * The voices of a chord after a move.
+ * @example movedVoices(voices, { kind: 'leaveOut', ids: ['a'], pitches: [], section }) // all but a
+ */
 export function movedVoices(
   voices: readonly Voice[],
   { kind, ids, pitches, section }: Move,

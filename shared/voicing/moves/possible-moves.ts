@@ -16,6 +16,7 @@ const OCTAVE: Semitones = 12;
  * @param voices of one chord
  * @param bassKind decides how low the double basses reach
  * @param asked whether moves of a voice, and of those linked to it, are wanted
+ * @example possibleMoves([lockedVoice], 'four-string') // []
  */
 export function possibleMoves(
   voices: readonly Voice[],

@@ -33,12 +33,18 @@ export interface Profile {
 
 const EMPTY_PROFILE: Profile = { from: 0, values: new Float64Array(0) };
 
-/** @param step 0.5 or 0.25 semitones, so that the registers' edges are points */
+/**
+ * @param step 0.5 or 0.25 semitones, so that the registers' edges are points
+ * @example pitchAxis(0.5).count // 202
+ */
 export function pitchAxis(step: Semitones): PitchAxis {
   return { step, count: Math.round((AXIS_HIGH - AXIS_LOW) / step) + 1 };
 }
 
-/** @returns the pitch of a point of the axis */
+/**
+ * @returns the pitch of a point of the axis
+ * @example pitchAt(pitchAxis(0.5), 1) // 12, C0
+ */
 export function pitchAt(axis: PitchAxis, point: number): Midi {
   return AXIS_LOW + axis.step * point;
 }
@@ -46,6 +52,7 @@ export function pitchAt(axis: PitchAxis, point: number): Midi {
 /**
  * @param width semitones at which the window has fallen to e^−2
  * @source W(d) = exp(−2 (d / width)²), d in semitones
+ * @example windowValue(2, 2) // 0.1353, e^−2
  */
 export function windowValue(distance: Semitones, width: Semitones): number {
   return Math.exp(-EXPONENT * (distance / width) ** 2);

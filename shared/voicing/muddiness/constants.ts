@@ -28,7 +28,10 @@ export interface MuddinessConstants {
   readonly threshold: number;
 }
 
-/** @returns x^m as a function of x ≥ 0; a square has a quicker way of its own */
+/**
+ * @returns x^m as a function of x ≥ 0; a square has a quicker way of its own
+ * @example poolingPower({ pooling: 2 })(3) // 9
+ */
 export function poolingPower({ pooling }: Pick<MuddinessConstants, 'pooling'>): (x: number) => number {
   return pooling === 2 ? (x) => x * x : (x) => x ** pooling;
 }

@@ -22,7 +22,10 @@ export type Joinable = Pick<
   'toneKey' | 'f0Hz' | 'nominalDb' | 'instrument' | 'technique' | 'dynamic'
 >;
 
-/** @returns the power of a level: 1 at 0 dB */
+/**
+ * @returns the power of a level: 1 at 0 dB
+ * @example powerOf(10) // 10
+ */
 export function powerOf(level: Decibels): number {
   return 10 ** (level / DB_PER_POWER_DECADE);
 }
@@ -59,7 +62,10 @@ export function joinUnisons(voices: readonly Joinable[], a4Hz: Hertz): readonly 
   return groups.map((group) => joined(group, a4Hz));
 }
 
-/** @returns whether two voices sound one pitch */
+/**
+ * @returns whether two voices sound one pitch
+ * @example inUnison({ f0Hz: 440 }, { f0Hz: 441 }) // false
+ */
 export function inUnison(a: Pick<Joinable, 'f0Hz'>, b: Pick<Joinable, 'f0Hz'>): boolean {
   return Math.abs(a.f0Hz - b.f0Hz) < SAME_PITCH * b.f0Hz;
 }

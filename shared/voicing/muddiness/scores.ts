@@ -36,7 +36,10 @@ export function registerPeaks(density: Float64Array, axis: PitchAxis): readonly 
   });
 }
 
-/** @returns the register with the highest peak; null where nothing clouds */
+/**
+ * @returns the register with the highest peak; null where nothing clouds
+ * @example cloudiestOf([]) // null
+ */
 export function cloudiestOf(peaks: readonly RegisterPeak[]): RegisterPeak | null {
   return peaks.reduce<RegisterPeak | null>(
     (best, peak) => (peak.density > (best?.density ?? 0) ? peak : best),
@@ -47,7 +50,10 @@ export function cloudiestOf(peaks: readonly RegisterPeak[]): RegisterPeak | null
 /** The highest index that is told from 100: beyond it ρ is over fifty times the threshold. */
 const HIGHEST_INDEX = 100 - 1e-13;
 
-/** @returns ρ of an index, the inverse of {@link indexOf} */
+/**
+ * @returns ρ of an index, the inverse of {@link indexOf}
+ * @example densityOfIndex(50, 0.2) // 0.2
+ */
 export function densityOfIndex(index: number, threshold: number): number {
   return -threshold * Math.log2(1 - Math.min(index, HIGHEST_INDEX) / FULL);
 }

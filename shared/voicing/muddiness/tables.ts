@@ -96,7 +96,10 @@ function neighbourhoodOf({ fundamental }: Tone, axis: PitchAxis): Profile {
   return { from, values };
 }
 
-/** @source w = ½ (1 + cos(πd/12)) for a fundamental d semitones away, 0 beyond an octave */
+/**
+ * @source w = ½ (1 + cos(πd/12)) for a fundamental d semitones away, 0 beyond an octave
+ * @example neighbourWeight(6) // 0.5
+ */
 export function neighbourWeight(distance: Semitones): number {
   return Math.abs(distance) >= NEIGHBOURHOOD ? 0 : (1 + Math.cos((Math.PI * distance) / NEIGHBOURHOOD)) / 2;
 }

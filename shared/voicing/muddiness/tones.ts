@@ -29,6 +29,7 @@ export interface Tone {
  * @param partials rising in frequency, at least one; their common level drops out
  * @param a4Hz places the tone on the pitch axis
  * @param atMf the same partials at mf, by which they are scaled
+ * @example toneOf(partials, 440).series[1] // half of the first: 1/n
  */
 export function toneOf(partials: readonly Partial[], a4Hz: Hertz, atMf: readonly Partial[] = partials): Tone {
   const { length } = partials;
@@ -77,6 +78,7 @@ function seriesEnergy({ n }: Partial): number {
  * @param y their difference in equivalent rectangular bandwidths at their mean
  * @returns 0 … 1, 1 at the peak, 0 from the reach on
  * @source g(y) = ((y/p) exp(1 − y/p))^s, after the form of Parncutt's curve for Hutchinson & Knopoff 1978
+ * @example cloudingAt(constants.peakErb, constants) // 1
  */
 export function cloudingAt(y: number, { peakErb, sharpness, reachErb }: MuddinessConstants): number {
   if (y >= reachErb) return 0;
@@ -84,7 +86,10 @@ export function cloudingAt(y: number, { peakErb, sharpness, reachErb }: Muddines
   return sharpness === SQUARE_ROOT ? Math.sqrt(base) : base ** sharpness;
 }
 
-/** @returns the difference of two frequencies in equivalent rectangular bandwidths at their mean */
+/**
+ * @returns the difference of two frequencies in equivalent rectangular bandwidths at their mean
+ * @example distanceErb(1000, 1000) // 0
+ */
 export function distanceErb(a: Hertz, b: Hertz): number {
   return Math.abs(a - b) / erbAt((a + b) / 2);
 }
