@@ -15,6 +15,7 @@ export const shelvedChordSchema = z.strictObject({
   a4Hz: shape.a4Hz,
   intonation: shape.intonation,
   ensemble: ensembleSchema,
+  limits: shape.limits,
 });
 export type ShelvedChord = z.infer<typeof shelvedChordSchema>;
 

@@ -1,6 +1,7 @@
 import { computed, ref, shallowRef } from 'vue';
 import type { DraftDocument } from '#shared/study/draft';
 import { newStudy } from '#shared/study/new-study';
+import { rebaseBench, type TakingIn } from '@/stores/bench-rebase';
 import { emptyHistory, remember, stepBack, stepForward, type History } from '@/stores/history';
 import { newId } from '@/stores/ids';
 
@@ -67,22 +68,7 @@ export function useBenchDocument() {
     study.value = document;
   }
 
-  /**
-   * Takes in what was saved elsewhere: under the present and under every step that led to it, so that undo takes back
-   * what was done here and nothing else.
-   * @param alter how a state of the document takes it in; `null` where it cannot
-   * @returns whether the present could
-   */
-  function rebase(alter: (document: DraftDocument) => DraftDocument | null): boolean {
-    const present = alter(study.value);
-    if (!present) return false;
-    const through = (steps: readonly DraftDocument[]) => steps.flatMap((step) => alter(step) ?? []);
-    const { past, future } = history.value;
-    history.value = { past: through(past), future: through(future) };
-    gestureFrom.value = gestureFrom.value && (alter(gestureFrom.value) ?? present);
-    study.value = present;
-    return true;
-  }
+  const rebase = (takeIn: TakingIn): boolean => rebaseBench({ study, history, gestureFrom }, takeIn);
 
   /** @param saved the revision that was sent; changes made meanwhile stay unsaved */
   function markSaved(saved: number = revision.value): void {

@@ -1,7 +1,14 @@
 import { ref, watch, type Ref, type ShallowRef } from 'vue';
 import { newStudy } from '#shared/study/new-study';
 import type { DraftDocument } from '#shared/study/draft';
-import { browserStorage, forgetSetAside, readDraft, readSetAside, writeDraft } from '@/stores/draft-storage';
+import {
+  browserStorage,
+  forgetSetAside,
+  readDraft,
+  readSetAside,
+  writeDraft,
+  writeSetAside,
+} from '@/stores/draft-storage';
 import { newId } from '@/stores/ids';
 
 /**
@@ -37,6 +44,12 @@ export function useDraftKeeping(
     draftKept.value = writeDraft(storage, newStudy(newId()));
   }
 
+  /** Unsaved work that cannot be read is shown to be taken away, like such a draft. */
+  function putAside(text: string): void {
+    writeSetAside(storage, text);
+    setAside.value = text;
+  }
+
   function discardSetAside(): void {
     forgetSetAside(storage);
     setAside.value = null;
@@ -50,5 +63,5 @@ export function useDraftKeeping(
     { flush: 'sync' },
   );
 
-  return { holdsDraft, setAside, draftKept, openDraft, leaveDraft, clearDraft, discardSetAside };
+  return { holdsDraft, setAside, draftKept, openDraft, leaveDraft, clearDraft, putAside, discardSetAside };
 }

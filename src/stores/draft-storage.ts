@@ -44,6 +44,15 @@ export function readSetAside(storage: Storage | null): string | null {
   return storage?.getItem(SET_ASIDE_KEY) ?? null;
 }
 
+/** Keeps something that cannot be read for the reader to take away; a full browser keeps it as long as the page lasts. */
+export function writeSetAside(storage: Storage | null, text: string): void {
+  try {
+    storage?.setItem(SET_ASIDE_KEY, text);
+  } catch {
+    // It is on the page all the same.
+  }
+}
+
 export function forgetSetAside(storage: Storage | null): void {
   storage?.removeItem(SET_ASIDE_KEY);
 }

@@ -7,6 +7,7 @@ import { allWork } from '@/stores/kept-work';
 import { useSessionStore } from '@/stores/session.store';
 import { forgetSignUp } from '@/stores/sign-up-memory';
 import { useStudyStore } from '@/stores/study.store';
+import { workStorage } from '@/stores/work-storage';
 
 /**
  * Takes away what whoever was signed in left in this browser: their open study, unsaved work, draft and
@@ -32,7 +33,7 @@ export function forgetPerson(): void {
 export function unsavedWork(): readonly DraftDocument[] {
   const [bench, study, session] = [useBenchStore(), useStudyStore(), useSessionStore()];
   const onTheBench = study.hasUnsaved || (bench.holdsDraft && !bench.isEmpty) ? [bench.study] : [];
-  const kept = session.account ? allWork(browserStorage(), session.account.id) : new Map();
+  const kept = session.account ? allWork(workStorage(), session.account.id) : new Map();
   const elsewhere = [...kept].filter(([studyId]) => studyId !== study.study?.id);
   return [...onTheBench, ...elsewhere.map(([, work]) => work.document)];
 }

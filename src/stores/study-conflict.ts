@@ -26,7 +26,7 @@ export function takeTheirs(desk: StudyDesk): void {
   if (!newest) return;
   layOut(desk, newest);
   desk.bench.replaceDocument(newest.document);
-  forgetWork(desk.storage, newest.id);
+  forgetWork(desk.works, newest.id);
 }
 
 /** Makes a new study of what is on the bench and goes on with that; the other stands as it is. */
@@ -36,7 +36,7 @@ export async function keepMineAsNew(desk: StudyDesk): Promise<Study | null> {
   const key = copyKeys.get(conflict) ?? newRequestKey();
   copyKeys.set(conflict, key);
   const created = await copyAsOwn(desk, ownTitle(desk.bench.study.title), key);
-  forgetWork(desk.storage, newest.id);
+  forgetWork(desk.works, newest.id);
   return created;
 }
 

@@ -7,8 +7,9 @@ import { useBenchStore } from '@/stores/bench.store';
 import { browserStorage } from '@/stores/draft-storage';
 import type { SaveFailure } from '@/stores/save-failure';
 import { useSessionStore } from '@/stores/session.store';
+import { workStorage } from '@/stores/work-storage';
 
-export type SaveState = 'saved' | 'unsaved' | 'saving' | 'failed' | 'conflict';
+export type SaveState = 'saved' | 'unsaved' | 'saving' | 'offline' | 'failed' | 'conflict';
 
 /** One intended change on its way, with the bench's revision that it holds. */
 export interface Sending {
@@ -39,21 +40,24 @@ export function useStudyDesk() {
   const merged = shallowRef<Merged | null>(null);
   /** Why the bench cannot be saved as it stands. */
   const unfinished = ref<string | null>(null);
-  const keptInBrowser = ref(true);
+  /** Whether the browser took the last change, as far as it has said. */
+  const taken = ref(true);
+  const works = workStorage();
+  const keptInBrowser = computed(() => taken.value && !works.failed.value);
 
   const maySave = computed(() => study.value !== null && mayDoToStudy(study.value.relation, 'save'));
   const hasUnsaved = computed(() => maySave.value && (bench.dirty || sending.value !== null));
   const saveState = computed<SaveState>(() => {
     if (conflict.value) return 'conflict';
-    if (failure.value) return 'failed';
+    if (failure.value) return failure.value.kind === 'passing' ? 'offline' : 'failed';
     if (inFlight.value) return 'saving';
     return hasUnsaved.value ? 'unsaved' : 'saved';
   });
   const saveProblem = computed(() => failure.value?.message ?? unfinished.value);
 
-  const around = { bench, session: useSessionStore(), storage: browserStorage() };
+  const around = { bench, session: useSessionStore(), storage: browserStorage(), works };
   const opening = { accountId, study, status, problem, wantedId, basedOn };
-  const saving = { sending, inFlight, failure, failures, conflict, merged, unfinished, keptInBrowser };
+  const saving = { sending, inFlight, failure, failures, conflict, merged, unfinished, taken, keptInBrowser };
   return { ...around, ...opening, ...saving, maySave, hasUnsaved, saveState, saveProblem };
 }
 export type StudyDesk = ReturnType<typeof useStudyDesk>;

@@ -4,16 +4,22 @@ import { studyDocumentSchema } from '#shared/study/study.document';
 import { ApiError } from '@/api/api-error';
 import { createStudy, readStudy } from '@/api/studies';
 import { draftRequestKey, forgetDraftRequestKey } from '@/stores/draft-request-key';
-import { forgetWork, readWork } from '@/stores/kept-work';
+import { forgetWork, readUnreadable, readWork } from '@/stores/kept-work';
 import { layOut, type StudyDesk } from '@/stores/study-desk';
 import { finishedDocument, flush, settle } from '@/stores/study-saving';
 
 /** Puts back what this person left unsaved here, on top of the study as the server has it. */
 function takeUpWork(desk: StudyDesk, opened: Study): void {
-  const work = desk.maySave.value ? readWork(desk.storage, opened.id, desk.accountId.value ?? '') : null;
+  const accountId = desk.accountId.value ?? '';
+  const unreadable = readUnreadable(desk.works, opened.id, accountId);
+  if (unreadable !== null) {
+    desk.bench.putAside(unreadable);
+    forgetWork(desk.works, opened.id);
+  }
+  const work = desk.maySave.value ? readWork(desk.works, opened.id, accountId) : null;
   if (!work) return;
   if (sameStudy(work.document, opened.document)) {
-    forgetWork(desk.storage, opened.id);
+    forgetWork(desk.works, opened.id);
     return;
   }
   desk.basedOn.value = work.basedOn;
@@ -38,6 +44,7 @@ export async function open(desk: StudyDesk, studyId: string): Promise<void> {
   await settle(desk);
   // Where the server was away when the page began, it is not known yet whose desk this is.
   await desk.session.load();
+  await desk.works.refresh();
   if (desk.wantedId.value !== studyId) return;
   layOut(desk, null);
   try {

@@ -21,7 +21,7 @@ const PAUSE_MS = 1500;
 export function keep(desk: StudyDesk): void {
   const [open, accountId] = [desk.study.value, desk.accountId.value];
   if (!open || !accountId) return;
-  desk.keptInBrowser.value = writeWork(desk.storage, open.id, {
+  desk.taken.value = writeWork(desk.works, open.id, {
     accountId,
     basedOn: desk.basedOn.value,
     document: desk.bench.study,
@@ -63,11 +63,11 @@ function takingIn(sent: Sending, saved: SavedStudy) {
 }
 
 /** A study that was left while its save was on its way: what the save did not hold stays kept. */
-function acceptElsewhere({ storage, accountId }: StudyDesk, sent: Sending, saved: SavedStudy): void {
-  const work = readWork(storage, saved.id, accountId.value ?? '');
-  if (!work || sameStudy(work.document, sent.body.document)) return forgetWork(storage, saved.id);
+function acceptElsewhere({ works, accountId }: StudyDesk, sent: Sending, saved: SavedStudy): void {
+  const work = readWork(works, saved.id, accountId.value ?? '');
+  if (!work || sameStudy(work.document, sent.body.document)) return forgetWork(works, saved.id);
   const document = takingIn(sent, saved)(work.document);
-  writeWork(storage, saved.id, {
+  writeWork(works, saved.id, {
     ...work,
     ...(document && { document, basedOn: saved.number }),
     pending: null,
@@ -87,7 +87,7 @@ function accept(desk: StudyDesk, sent: Sending, saved: SavedStudy): void {
   if (sent.revision !== null) desk.bench.markSaved(sent.revision);
   else if (sameStudy(saved.document, desk.bench.study)) desk.bench.markSaved();
   if (desk.bench.dirty) keep(desk);
-  else forgetWork(desk.storage, saved.id);
+  else forgetWork(desk.works, saved.id);
 }
 
 function refuse(desk: StudyDesk, studyId: string, error: unknown): void {

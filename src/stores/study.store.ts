@@ -22,7 +22,7 @@ export const useStudyStore = defineStore('study', () => {
     layOut(desk, null);
     desk.accountId.value = null;
     desk.status.value = 'idle';
-    forgetAllWork(desk.storage);
+    forgetAllWork(desk.works);
   }
 
   /** Clears the desk for whoever comes, unless it is theirs already. */
@@ -32,7 +32,7 @@ export const useStudyStore = defineStore('study', () => {
       openDraft(desk);
     }
     desk.accountId.value = accountId;
-    forgetWorkOfOthers(desk.storage, accountId);
+    forgetWorkOfOthers(desk.works, accountId);
   }
 
   const {

@@ -2,7 +2,7 @@ import { when } from '#shared/time/when';
 
 /** How the work on the bench stands, seen by the reader. */
 export interface SavedSituation {
-  readonly state: 'draft' | 'readOnly' | 'saved' | 'unsaved' | 'saving' | 'failed' | 'conflict';
+  readonly state: 'draft' | 'readOnly' | 'saved' | 'unsaved' | 'saving' | 'offline' | 'failed' | 'conflict';
   readonly savedAt: string | null;
   /** Of the newest save. */
   readonly number: number | null;
@@ -28,9 +28,11 @@ export function savedText(situation: SavedSituation): string {
       return 'Saving';
     case 'unsaved':
       return keptInBrowser ? 'Not saved yet' : NOT_KEPT;
+    case 'offline':
+      return keptInBrowser ? 'Offline: kept in this browser, saved when the server is back' : NOT_KEPT;
     case 'failed':
-      return 'Not saved, kept in this browser';
+      return keptInBrowser ? 'Not saved, kept in this browser' : NOT_KEPT;
     case 'conflict':
-      return 'Two saves have met: choose';
+      return 'Set aside: two saves have met, choose';
   }
 }

@@ -3,10 +3,11 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { forgetCsrfToken } from '@/api/csrf';
 import { queryClient } from '@/plugins/query';
 import { writeDraft } from '@/stores/draft-storage';
-import { writeWork } from '@/stores/kept-work';
+import { forgetAllWork, writeWork } from '@/stores/kept-work';
 import { forgetPerson, unsavedWork } from '@/stores/leaving';
 import { useSessionStore } from '@/stores/session.store';
 import { rememberSignUp } from '@/stores/sign-up-memory';
+import { workStorage } from '@/stores/work-storage';
 import { ADA, atTheDesk, documentOf, STUDY_ID, studyOf } from '../../support/open-study';
 import { noAnswer, stubApi } from '../../support/stubbed-api';
 
@@ -15,6 +16,7 @@ const done = () => ({ body: {} });
 
 beforeEach(() => {
   localStorage.clear();
+  forgetAllWork(workStorage());
   forgetCsrfToken();
 });
 afterEach(() => vi.unstubAllGlobals());
@@ -24,12 +26,13 @@ describe('leaving', () => {
     stubApi({ [`GET /api/studies/${STUDY_ID}`]: () => ({ body: studyOf(documentOf('C3')) }) });
     const { study, bench, session } = atTheDesk();
     const work = { accountId: ADA.id, basedOn: 1, document: documentOf('D3'), pending: null };
-    writeWork(localStorage, 'study-of-another-day-12', work);
+    writeWork(workStorage(), 'study-of-another-day-12', work);
     writeDraft(localStorage, { ...documentOf('A2'), title: 'Ebb' });
     rememberSignUp(localStorage, ADA.email);
     queryClient.setQueryData(['studies'], ['theirs']);
     await study.open(STUDY_ID);
     forgetPerson();
+    await workStorage().refresh();
     expect([session.account, study.study, bench.isEmpty]).toEqual([null, null, true]);
     expect(queryClient.getQueryData(['studies'])).toBeUndefined();
     expect(JSON.stringify({ ...localStorage })).not.toMatch(/river\.example|Ebb|D3|C3|A2/);
@@ -42,8 +45,8 @@ describe('leaving', () => {
     expect(unsavedWork()).toEqual([]);
     const document = { ...documentOf('D3'), title: 'Left on the train' };
     const work = { accountId: ADA.id, basedOn: 1, document, pending: null };
-    writeWork(localStorage, 'study-of-another-day-12', work);
-    writeWork(localStorage, 'study-of-somebody-else', { ...work, accountId: 'somebody-else-entirely' });
+    writeWork(workStorage(), 'study-of-another-day-12', work);
+    writeWork(workStorage(), 'study-of-somebody-else', { ...work, accountId: 'somebody-else-entirely' });
     expect(unsavedWork().map(({ title }) => title)).toEqual(['Left on the train']);
   });
 

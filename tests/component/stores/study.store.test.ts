@@ -3,7 +3,8 @@ import { nextTick } from 'vue';
 import { saveStudy } from '#shared/contracts/studies';
 import { emptyChord } from '#shared/study/new-study';
 import { forgetCsrfToken } from '@/api/csrf';
-import { readWork } from '@/stores/kept-work';
+import { forgetAllWork, readWork } from '@/stores/kept-work';
+import { workStorage } from '@/stores/work-storage';
 import { atTheDesk, ADA, documentOf, savedOf, staleOf, STUDY_ID, studyOf } from '../../support/open-study';
 import { noAnswer, refusal, stubApi, type StubbedRequest } from '../../support/stubbed-api';
 
@@ -19,7 +20,7 @@ const take = (request: StubbedRequest) => {
   return { body: savedOf(document, basedOn + 1) };
 };
 const reads = (number = 1) => ({ body: studyOf(documentOf('C3'), number) });
-const kept = () => readWork(localStorage, STUDY_ID, ADA.id);
+const kept = () => readWork(workStorage(), STUDY_ID, ADA.id);
 
 async function opened(routes: Parameters<typeof stubApi>[0]) {
   const api = stubApi({ [READ]: () => reads(), ...routes });
@@ -32,6 +33,7 @@ async function opened(routes: Parameters<typeof stubApi>[0]) {
 beforeEach(() => {
   vi.useFakeTimers();
   localStorage.clear();
+  forgetAllWork(workStorage());
   forgetCsrfToken();
 });
 afterEach(() => {
@@ -90,7 +92,7 @@ describe('a save that does not get through', () => {
     const { study, put, saves } = await opened({ [SAVE]: [noAnswer, take] });
     put('D3');
     await study.save();
-    expect(study.saveState).toBe('failed');
+    expect(study.saveState).toBe('offline');
     expect(kept()?.document.chords[0]?.voices[0]?.pitch).toBe('D3');
     await vi.advanceTimersByTimeAsync(FIRST_RETRY_MS);
     const [first, second] = saves();
@@ -149,7 +151,7 @@ describe('a save that does not get through', () => {
     put('D3');
     await study.save();
     study.clearFor('account-bea');
-    expect([study.study, bench.isEmpty, localStorage.getItem(`siltline.unsaved.${STUDY_ID}`)]).toEqual([
+    expect([study.study, bench.isEmpty, workStorage().getItem(`siltline.unsaved.${STUDY_ID}`)]).toEqual([
       null,
       true,
       null,
