@@ -10,6 +10,8 @@ export interface CloudingRow {
   readonly register: string;
   readonly top: number;
   readonly height: number;
+  /** 0 … 100. */
+  readonly index: number;
   readonly colour: string;
 }
 
@@ -37,7 +39,7 @@ export function cloudingRows({ muddiness }: ChordAnalysis, axis: PitchAxis): rea
   return muddiness.registers.flatMap(({ register, index, at }) => {
     if (at === null || index < LEAST_INDEX) return [];
     const [top, bottom] = [axis.yOf(at + HALF_WINDOW), axis.yOf(at - HALF_WINDOW)];
-    return [{ register, top, height: bottom - top, colour: siltColour(index) }];
+    return [{ register, top, height: bottom - top, index, colour: siltColour(index) }];
   });
 }
 

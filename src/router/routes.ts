@@ -7,6 +7,8 @@ declare module 'vue-router' {
     title?: string;
     /** Who may come: only those signed in, only those who are not, or only in the demonstration. */
     for?: 'account' | 'visitor' | 'demo';
+    /** Without the head of the other pages: it is shown to others or printed. */
+    bare?: boolean;
   }
 }
 
@@ -18,6 +20,30 @@ export const routes: RouteRecordRaw[] = [
     name: 'studies',
     component: () => import('@/pages/StudiesPage.vue'),
     meta: { title: 'Studies', for: 'account' },
+  },
+  {
+    path: '/present',
+    name: 'present',
+    component: () => import('@/pages/PresentPage.vue'),
+    meta: { title: 'Projector', bare: true },
+  },
+  {
+    path: '/studies/:studyId/present',
+    name: 'study-present',
+    component: () => import('@/pages/PresentPage.vue'),
+    meta: { title: 'Projector', for: 'account', bare: true },
+  },
+  {
+    path: '/print',
+    name: 'print',
+    component: () => import('@/pages/PrintPage.vue'),
+    meta: { title: 'Print', bare: true },
+  },
+  {
+    path: '/studies/:studyId/print',
+    name: 'study-print',
+    component: () => import('@/pages/PrintPage.vue'),
+    meta: { title: 'Print', for: 'account', bare: true },
   },
   {
     path: '/reference',
