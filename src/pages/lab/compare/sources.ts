@@ -1,4 +1,6 @@
+import { shelfSource } from '@/composables/shelf-source';
 import { studiesSource } from '@/composables/studies-source';
+import { versionsSource } from '@/composables/versions-source';
 import { progressionSource, type VoicingSource } from '@/composables/voicing-sources';
 import { useBenchStore } from '@/stores/bench.store';
 import { useSessionStore } from '@/stores/session.store';
@@ -12,6 +14,8 @@ export function useVoicingSources(): readonly VoicingSource[] {
   const openId = (): string | null => study.study?.id ?? null;
   return [
     progressionSource(() => bench.study, openId),
+    versionsSource(() => (study.maySave ? openId() : null)),
     studiesSource(() => session.account !== null, openId),
+    shelfSource(() => session.account !== null),
   ];
 }
