@@ -15,7 +15,10 @@ export interface LaneNote {
   readonly midi: number;
   readonly name: string;
   readonly spoken: string;
-  readonly hertz: string;
+  /** Of its fundamental; `null` where it does not sound. */
+  readonly frequencyHz: number | null;
+  /** It shares its height with others of its lane, and takes less room. */
+  readonly tight: boolean;
   readonly beyond: boolean;
   /** Pixels from the top. */
   readonly y: number;
@@ -34,18 +37,22 @@ interface Shown {
 
 /** Height of a token and a little air, in pixels. */
 const TOKEN_HEIGHT = 24;
-/** Of a lane, from its edge to the middle of the outermost tokens. */
-const EDGE = 0.14;
+/** From the middle of a token to its edge, in pixels, with a little air: a note and its sign. */
+const TOKEN_HALF = 26;
+/** The same where notes stand beside each other and take less room. */
+const TIGHT_HALF = 23;
+const MIDDLE = 1 / 2;
 const LANE_PERCENT = 100 / SECTIONS.length;
 
-function fundamental(sound: VoiceSound | undefined): string {
-  const first = sound?.partials.find(({ n }) => n === 1);
-  return first ? hertzText(first.frequencyHz) : '';
+function fundamental(sound: VoiceSound | undefined): number | null {
+  return sound?.partials.find(({ n }) => n === 1)?.frequencyHz ?? null;
 }
 
-/** One column stands in the middle of its lane; several reach from edge to edge, and a little over. */
-function leftOf(section: Section, { column, columns }: TokenColumn): number {
-  const across = columns === 1 ? 1 / 2 : EDGE + ((1 - 2 * EDGE) * column) / (columns - 1);
+/** One column stands in the middle of its lane; several reach from edge to edge, and none over it. */
+function leftOf(section: Section, { column, columns }: TokenColumn, laneWidth: number): number {
+  const half = columns > 1 ? TIGHT_HALF : TOKEN_HALF;
+  const edge = laneWidth > 0 ? Math.min(half / laneWidth, MIDDLE) : MIDDLE / 2;
+  const across = columns === 1 ? MIDDLE : edge + ((1 - 2 * edge) * column) / (columns - 1);
   return LANE_PERCENT * (SECTIONS.indexOf(section) + across);
 }
 
@@ -61,8 +68,14 @@ function spokenOf(voice: Voice, hertz: string, beyond: boolean, naming: NoteNami
   return parts.filter((part) => part !== '').join(', ');
 }
 
-/** Places the notes of a chord in the five lanes, in the chord's own order. */
-export function laneNotes({ chord, analysis, ensemble, spelling, naming, axis }: Shown): readonly LaneNote[] {
+/**
+ * Places the notes of a chord in the five lanes, in the chord's own order.
+ * @param laneWidth in pixels; 0 while it is not known
+ */
+export function laneNotes(
+  { chord, analysis, ensemble, spelling, naming, axis }: Shown,
+  laneWidth = 0,
+): readonly LaneNote[] {
   const apart = TOKEN_HEIGHT / axis.semitone;
   const columns = new Map<string, TokenColumn>();
   for (const section of SECTIONS) {
@@ -76,17 +89,20 @@ export function laneNotes({ chord, analysis, ensemble, spelling, naming, axis }:
   const sounds = new Map(analysis.voices.map((sound) => [sound.id, sound]));
   return chord.voices.map((voice) => {
     const midi = midiOfName(voice.pitch);
-    const hertz = fundamental(sounds.get(voice.id));
+    const frequencyHz = fundamental(sounds.get(voice.id));
+    const hertz = frequencyHz === null ? '' : hertzText(frequencyHz);
+    const place = columns.get(voice.id) ?? { column: 0, columns: 1 };
     const beyond = reachOf(voice, ensemble.bass, spelling, naming).lying === 'beyond';
     return {
       voice,
       midi,
       name: displayPitch(voice.pitch, naming),
       spoken: spokenOf(voice, hertz, beyond, naming),
-      hertz,
+      frequencyHz,
+      tight: place.columns > 1,
       beyond,
       y: axis.yOf(midi),
-      left: leftOf(voice.section, columns.get(voice.id) ?? { column: 0, columns: 1 }),
+      left: leftOf(voice.section, place, laneWidth),
     };
   });
 }

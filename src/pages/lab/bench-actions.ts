@@ -2,14 +2,15 @@ import { midiOfName, pitchName } from '#shared/pitch/names';
 import { spellIn } from '#shared/pitch/spelling';
 import type { Section } from '#shared/strings/sections';
 import { firstNote } from '#shared/study/first-note';
-import { divide, joinStop, link, unlink } from '#shared/study/joins.changes';
 import { newVoice } from '#shared/study/new-study';
+import { moveSelected, removeSelected } from '#shared/study/selected.changes';
 import { changeChord, reorderChord } from '#shared/study/study.changes';
-import { MAX_VOICES, type Chord, type Voice } from '#shared/study/study.document';
+import { MAX_VOICES, type Chord } from '#shared/study/study.document';
 import { applyTyped } from '#shared/study/typed.changes';
 import type { TypedVoice } from '#shared/study/typing-line';
-import { addVoice, changeSection, moveVoice, removeVoice, setVoice } from '#shared/study/voices.changes';
+import { addVoice, changeSection, moveVoice } from '#shared/study/voices.changes';
 import type { ChordSettings } from '@/components/progression/ChordMenu.vue';
+import type { SelectionChoice } from '@/components/bench/selection-choice';
 import { notice } from '@/composables/notices';
 import type { useBenchStore } from '@/stores/bench.store';
 import { newId } from '@/stores/ids';
@@ -33,24 +34,24 @@ export function useVoiceActions(bench: Bench) {
     return voice.id;
   }
 
+  /** One note, or with it all that are selected where it only moves up or down. */
   function move(id: string, midi: number, section: Section): void {
     bench.changeCurrentChord((chord) => {
       const voice = chord.voices.find((other) => other.id === id);
-      const there = voice && voice.section !== section ? changeSection(chord, id, section) : chord;
-      return voice && midiOfName(voice.pitch) !== midi ? moveVoice(there, id, midi, bench.study.key) : there;
+      if (!voice) return chord;
+      const semitones = midi - midiOfName(voice.pitch);
+      if (voice.section === section && isOneOfMany(id)) {
+        return moveSelected(chord, bench.voiceIds, semitones, bench.study.key);
+      }
+      const there = voice.section === section ? chord : changeSection(chord, id, section);
+      return semitones === 0 ? there : moveVoice(there, id, midi, bench.study.key);
     });
   }
 
-  function join(voice: Voice, partner: Voice | null): void {
-    bench.changeCurrentChord((chord) =>
-      partner ? joinStop(chord, voice.id, partner) : divide(chord, voice),
-    );
-  }
-
-  function linkTo(voice: Voice, partner: Voice | null): void {
-    bench.changeCurrentChord((chord) =>
-      partner ? link(chord, voice.id, partner, newId()) : unlink(chord, voice.link ?? ''),
-    );
+  function choose(choice: SelectionChoice): void {
+    if (choice.kind === 'toggle') bench.toggleVoice(choice.id);
+    if (choice.kind === 'all') bench.selectVoices(bench.chord?.voices.map(({ id }) => id) ?? []);
+    if (choice.kind === 'one' && bench.voiceId) bench.selectVoices([bench.voiceId]);
   }
 
   function gesture(stage: 'begin' | 'end' | 'cancel'): void {
@@ -58,10 +59,10 @@ export function useVoiceActions(bench: Bench) {
     stages[stage]();
   }
 
-  const remove = (id: string): void => bench.changeCurrentChord((chord) => removeVoice(chord, id));
-  const lock = (id: string, locked: boolean): void =>
-    bench.changeCurrentChord((chord) => setVoice(chord, id, { locked }));
-  return { put, move, join, linkTo, gesture, remove, lock };
+  const isOneOfMany = (id: string): boolean => bench.voiceIds.length > 1 && bench.voiceIds.includes(id);
+  const remove = (id: string): void =>
+    bench.changeCurrentChord((chord) => removeSelected(chord, isOneOfMany(id) ? bench.voiceIds : [id]));
+  return { put, move, choose, gesture, remove };
 }
 
 /** The typing line's side of the bench: each line is laid over the chord as it was when the typing began. */

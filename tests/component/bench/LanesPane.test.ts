@@ -1,6 +1,7 @@
 import { mount } from '@vue/test-utils';
 import { Quasar } from 'quasar';
 import { afterEach, describe, expect, it } from 'vitest';
+import { nextTick } from 'vue';
 import { midiOfName } from '#shared/pitch/names';
 import { DEFAULT_ENSEMBLE } from '#shared/study/study.document';
 import { pitchAxis } from '@/charts/pitch-axis';
@@ -16,7 +17,7 @@ function lanesOf(line: string, props: Partial<InstanceType<typeof LanesPane>['$p
     props: {
       ...{ chord, axis, analysis: analysisOf(chord), ensemble: DEFAULT_ENSEMBLE },
       ...{ spelling: { tonic: 'C', mode: 'major' }, naming: 'english' },
-      ...{ selectedId: null, markedIds: [], readOnly: false },
+      ...{ selectedId: null, markedIds: [], readOnly: false, a4Hz: 440 },
       ...props,
     },
     global: { plugins: [Quasar] },
@@ -124,6 +125,34 @@ describe('the lanes', () => {
     const { token } = lanesOf('Vc B1');
     expect(token('note-1').classes()).toContain('beyond');
     expect(token('note-1').attributes('aria-valuetext')).toContain('out of reach');
+  });
+
+  it('when a note is dragged, then its frequency and its strings are told', async () => {
+    const { token } = lanesOf('Vc A2');
+    const note = token('note-1').element;
+    note.dispatchEvent(pointer('pointerdown', { clientX: 10, clientY: 300 }));
+    note.dispatchEvent(pointer('pointermove', { clientX: 10, clientY: 290 }));
+    await nextTick();
+    // A2 lies on the cello's G string (G2) and, as a ninth above C2, high on the C string.
+    expect(token('note-1').get('.told').text()).toContain('110 Hz, strings III');
+    note.dispatchEvent(pointer('pointerup', { clientX: 10, clientY: 290 }));
+  });
+
+  it('when a note is clicked with Shift, then it is selected with the others and nothing is dragged', () => {
+    const { wrapper, token } = lanesOf('Vc A2 F3', { selectedId: 'note-1' });
+    token('note-2').element.dispatchEvent(pointer('pointerdown', { shiftKey: true }));
+    expect(wrapper.emitted('choose')).toEqual([[{ kind: 'toggle', id: 'note-2' }]]);
+  });
+
+  it('when several are selected, then each is shown so, and Ctrl A and Escape ask for all and for one', async () => {
+    const { wrapper, token } = lanesOf('Vc A2 F3', {
+      selectedId: 'note-1',
+      selectedIds: ['note-1', 'note-2'],
+    });
+    expect(token('note-2').classes()).toContain('selected');
+    await token('note-1').trigger('keydown', { key: 'a', ctrlKey: true });
+    await token('note-1').trigger('keydown', { key: 'Escape' });
+    expect(wrapper.emitted('choose')).toEqual([[{ kind: 'all' }], [{ kind: 'one' }]]);
   });
 
   it('when the study may only be read, then nothing can be moved or put in', async () => {

@@ -12,17 +12,13 @@ import {
   setSelected,
 } from '#shared/study/selected.changes';
 import { MODES, type Chord } from '#shared/study/study.document';
-import { chordsIntoKey, DIRECTIONS, studyBySemitones, studyIntoKey } from '#shared/study/transpose';
+import { chordsIntoKey, studyBySemitones, studyIntoKey, type Direction } from '#shared/study/transpose';
 import { chordOf } from '../../../support/typed-chords';
 
 const C_MAJOR: SpellingKey = { tonic: 'C', mode: 'major' };
 const pitches = (chord: Chord | undefined) => chord?.voices.map(({ pitch }) => pitch).join(' ');
-const inKey = (
-  line: string,
-  from: SpellingKey,
-  to: SpellingKey,
-  way: (typeof DIRECTIONS)[number] = 'nearest',
-) => pitches(chordsIntoKey([chordOf(line)], from, to, way)[0]);
+const inKey = (line: string, from: SpellingKey, to: SpellingKey, way: Direction = 'nearest') =>
+  pitches(chordsIntoKey([chordOf(line)], from, to, way)[0]);
 
 describe('several notes at once', () => {
   const chord = chordOf('DB D2, Vc D3 A3, Va F4');
