@@ -25,7 +25,8 @@ const BESIDE_HEAD = 3;
 const LEVEL = 0.55;
 
 /**
- * The lines that lead from the heads to their heights. They run to the right of all heads, where no words stand.
+ * The lines that lead from the heads to their heights: level until right of all heads, where no words stand, and
+ * there up or down.
  * @param heads of the chord; of an artificial harmonic's two the upper leads to where it sounds
  * @param voices of the chord
  * @param axis of the bench
@@ -38,15 +39,18 @@ export function leadersOf(
   axis: PitchAxis,
   end: number,
 ): readonly Leader[] {
-  const start = Math.max(0, ...heads.map(({ right }) => right)) + BESIDE_HEAD;
+  const sections = new Map(voices.map(({ id, section }) => [id, section]));
+  const rightOf = (own: (head: PlacedHead) => boolean): number =>
+    Math.max(0, ...heads.filter(own).map(({ right }) => right)) + BESIDE_HEAD;
+  const bend = rightOf(() => true);
+  const level = (end - bend) * LEVEL;
   return voices.flatMap(({ id, section, pitch }) => {
     const own = heads.filter(({ voiceId }) => voiceId === id);
     const head = own.reduce<PlacedHead | null>((top, one) => (top && top.y <= one.y ? top : one), null);
     if (!head) return [];
-    const from = { x: start, y: head.y };
+    const from = { x: rightOf(({ voiceId }) => sections.get(voiceId) === section), y: head.y };
     const to = { x: end, y: axis.yOf(midiOfName(pitch)) };
-    const level = (end - start) * LEVEL;
-    const path = `M${start} ${from.y}C${start + level} ${from.y} ${end - level} ${to.y} ${end} ${to.y}`;
-    return [{ voiceId: id, section, from, to, path }];
+    const curve = `C${bend + level} ${from.y} ${end - level} ${to.y} ${end} ${to.y}`;
+    return [{ voiceId: id, section, from, to, path: `M${from.x} ${from.y}L${bend} ${from.y}${curve}` }];
   });
 }

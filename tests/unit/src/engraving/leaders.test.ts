@@ -25,17 +25,24 @@ describe('the leaders', () => {
     expect(leaders.map(({ from }) => from.y)).toEqual([300, 50]);
   });
 
-  it('when words stand up to the edge of the heads, then no leader has a part left of it', () => {
+  it('when words stand up to the edge of the heads, then leaders turn up or down only right of them all', () => {
     const widest = Math.max(...heads.map(({ right }) => right));
-    for (const { path } of leadersOf(heads, voices, axis, END)) {
+    for (const { from, path } of leadersOf(heads, voices, axis, END)) {
       const numbers = path.match(/-?[\d.]+/g)?.map(Number) ?? [];
-      const xs = numbers.filter((_, index) => index % 2 === 0);
-      expect(xs).toHaveLength(4);
-      for (const x of xs) {
-        expect(x).toBeGreaterThan(widest);
+      const points = numbers.flatMap((x, index) => (index % 2 === 0 ? [{ x, y: numbers[index + 1] }] : []));
+      expect(points).toHaveLength(5);
+      for (const { x, y } of points) {
+        if (y !== from.y) expect(x).toBeGreaterThan(widest);
+        expect(x).toBeGreaterThanOrEqual(from.x);
         expect(x).toBeLessThanOrEqual(END);
       }
     }
+  });
+
+  it('when a head of another section is set aside, then a leader begins beside its own staff’s heads', () => {
+    const [low] = leadersOf(heads, voices, axis, END);
+    expect(low?.from.x).toBeGreaterThan(140);
+    expect(low?.from.x).toBeLessThan(152);
   });
 
   it('when the axis is another, then the leaders end at its heights', () => {
