@@ -70,11 +70,14 @@ function motionOf(change: NoteChange, from: LaneNote, to: LaneNote): readonly Mo
   return [{ id, section, x1: from.left, y1, x2: to.left, y2, near: false }];
 }
 
-/** The marks that lay the held voicing over the lanes of the one now. */
-export function heldMarks({ held, chord, analysis, ensemble, ...frame }: Shown): HeldMarks {
+/**
+ * The marks that lay the held voicing over the lanes of the one now.
+ * @param laneWidth in pixels; 0 while it is not known
+ */
+export function heldMarks({ held, chord, analysis, ensemble, ...frame }: Shown, laneWidth = 0): HeldMarks {
   const place = (notes: readonly LaneNote[]) => new Map(notes.map((note) => [note.voice.id, note]));
-  const before = place(laneNotes({ ...held, ...frame }));
-  const after = place(laneNotes({ chord, analysis, ensemble, ...frame }));
+  const before = place(laneNotes({ ...held, ...frame }, laneWidth));
+  const after = place(laneNotes({ chord, analysis, ensemble, ...frame }, laneWidth));
   const changes = compareVoicings(held.analysis, analysis).notes.filter(({ kind }) => kind !== 'stays');
   const covers = (note: LaneNote): boolean =>
     [...after.values()].some(
