@@ -31,7 +31,9 @@ function mountBar(sounds = [low, high], outside = '') {
 }
 
 function buttonOf(wrapper: VueWrapper, label: string) {
-  const button = wrapper.findAll('button').find((candidate) => candidate.text().trim() === label);
+  const button = wrapper
+    .findAll('button')
+    .find((candidate) => candidate.attributes('aria-label') === label || candidate.text().trim() === label);
   if (!button) throw new Error(`no button ${label}`);
   return button;
 }
@@ -155,6 +157,7 @@ describe('the cautions', () => {
   });
 
   it('when the chord lies low, then the page says that small loudspeakers do not sound it', () => {
+    localStorage.setItem('siltline.playback.cautioned', 'true');
     expect(mountBar([low, high]).text()).toContain('Laptops and phones do not sound the lowest octaves');
     bar?.unmount();
     expect(mountBar([high]).text()).not.toContain('Laptops and phones');

@@ -81,6 +81,82 @@ describe('playback', () => {
     expect(playback.listening.value).toEqual({ kind: 'chord' });
   });
 
+  it('when a part is heard, then it ends by itself after four seconds, and its sign with it', async () => {
+    vi.useFakeTimers();
+    const { playback, engine } = readyPlayback();
+    await playback.hear({ kind: 'voice', id: third.id });
+    expect(playback.heard.value).toEqual({ kind: 'voice', id: third.id });
+    expect(playback.mode.value).toBe('listen');
+    vi.advanceTimersByTime(3900);
+    expect(engine.state).toBe('held');
+    vi.advanceTimersByTime(200);
+    expect(engine.state).toBe('silent');
+    expect(playback.heard.value).toBeNull();
+    vi.useRealTimers();
+  });
+
+  it('when the chord is held after a part was heard, then it is held until it is stopped', async () => {
+    vi.useFakeTimers();
+    const { playback, engine } = readyPlayback();
+    await playback.hear({ kind: 'voice', id: third.id });
+    await playback.hold();
+    vi.advanceTimersByTime(60_000);
+    expect(engine.state).toBe('held');
+    expect(engine.held).toEqual(chord);
+    vi.useRealTimers();
+  });
+
+  it("when a voice's partials are played in turn, then each sounds alone and is told", async () => {
+    const { playback, engine } = readyPlayback();
+    await playback.playPartials(bass.id);
+    expect(engine.schedule.map(({ sounds }) => sounds[0]?.partials)).toEqual(
+      bass.partials.map((partial) => [partial]),
+    );
+    engine.head = engine.schedule[1]?.key ?? null;
+    await vi.waitFor(() => expect(playback.playingPartial.value).toEqual({ voiceId: bass.id, n: 2 }));
+    expect(playback.playingChordId.value).toBeNull();
+  });
+
+  it('when two chords are compared, then the louder one is taken back, and the other heard at a word', async () => {
+    const { playback, engine } = readyPlayback();
+    await playback.compareAB([top], [bass, third, top]);
+    expect(engine.side).toBe('a');
+    expect(engine.compared?.a).toEqual({ sounds: [top], trim: 0 });
+    expect(engine.compared?.b.trim).toBeLessThan(0);
+    playback.switchTo('b');
+    expect(engine.side).toBe('b');
+    expect(playback.side.value).toBe('b');
+    await playback.compareAB([top], [top]);
+    expect(engine.side).toBe('b');
+    expect(engine.compared?.b.trim).toBe(0);
+  });
+
+  it('when everything is to sound an octave higher, then what is held follows, at the same levels', async () => {
+    const { playback, engine } = readyPlayback();
+    await playback.hold();
+    playback.setOctave(true);
+    await vi.waitFor(() => expect(engine.held[2]?.partials).toEqual(seriesOn(880, [0])));
+    expect(engine.loudest).toBe(chordLevel(chord));
+    playback.setOctave(false);
+    await vi.waitFor(() => expect(engine.held).toEqual(chord));
+  });
+
+  it('when the room is switched off, then the engine is told, and a new page remembers it', async () => {
+    const { playback, engine } = readyPlayback();
+    await playback.hold();
+    playback.setRoom(false);
+    await vi.waitFor(() => expect(engine.room).toBe(false));
+    expect(readyPlayback().playback.room.value).toBe(false);
+    playback.setRoom(true);
+  });
+
+  it('when a chord has stood still and the engine is there, then its sound is made ready', async () => {
+    const { playback, engine } = readyPlayback();
+    await playback.strike();
+    playback.bring({ sounds: [bass, top], progression: [], tempoBpm: 60 });
+    await vi.waitFor(() => expect(engine.ready).toEqual([bass, top]));
+  });
+
   it('when a section is left out, then the others sound, but a pair is heard with everybody', async () => {
     const { playback, engine } = readyPlayback();
     playback.toggle('out', 'doubleBass');

@@ -16,7 +16,8 @@ const LOBE_BINS = 4;
 const FLOOR_DB = -200;
 
 function windowAt(index: number, size: number): number {
-  return BLACKMAN_HARRIS.reduce((sum, term, k) => sum + term * Math.cos((2 * Math.PI * k * index) / size), 0);
+  const angle = (2 * Math.PI * index) / size;
+  return BLACKMAN_HARRIS.reduce((sum, term, k) => sum + term * Math.cos(k * angle), 0);
 }
 
 /** In-place radix-2 fast Fourier transform (Cooley & Tukey 1965); the size is a power of 2. */
@@ -86,6 +87,15 @@ function vertex(spectrum: Float64Array, bin: number, binHz: number): Line {
   return { frequencyHz: (bin + shift) * binHz, levelDb: top - ((before - after) * shift) / 4 };
 }
 
+/** Silence is flat and has no top. */
+function isTop(spectrum: Float64Array, bin: number): boolean {
+  const top = spectrum[bin] ?? 0;
+  for (let away = 1; away <= LOBE_BINS; away += 1) {
+    if ((spectrum[bin - away] ?? 0) > top || (spectrum[bin + away] ?? 0) >= top) return false;
+  }
+  return true;
+}
+
 /**
  * All lines of a recording, both channels' energies together, so that it does not matter where a section sits.
  * @returns the strongest first; nothing within a line's own lobe counts as another
@@ -98,8 +108,7 @@ export function linesOf({ left, right, sampleRate }: Recording): readonly Line[]
   const binHz = sampleRate / (2 * spectrum.length);
   const lines: Line[] = [];
   for (let bin = LOBE_BINS; bin < spectrum.length - LOBE_BINS; bin += 1) {
-    const around = spectrum.subarray(bin - LOBE_BINS, bin + LOBE_BINS + 1);
-    if (spectrum[bin] === Math.max(...around)) lines.push(vertex(spectrum, bin, binHz));
+    if (isTop(spectrum, bin)) lines.push(vertex(spectrum, bin, binHz));
   }
   return lines.sort((a, b) => b.levelDb - a.levelDb);
 }
