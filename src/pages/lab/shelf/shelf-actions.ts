@@ -55,7 +55,7 @@ export function useShelfActions(shelf: ReturnType<typeof useShelf>) {
     if (!fitted) failed.value = 'There it would leave the strings’ compass: choose another octave.';
     else if (bench.study.chords.length >= MAX_CHORDS)
       failed.value = `A study has at most ${MAX_CHORDS} chords.`;
-    else putIn({ ...fitted, name: fitted.name ?? kept.name.slice(0, NAME_LENGTH) }, kept.name);
+    else putIn({ ...fitted, name: kept.name.slice(0, NAME_LENGTH).trim() }, kept.name);
   }
 
   function putIn(chord: Chord, called: string): void {
