@@ -25,8 +25,9 @@ export function shelfSource(signedIn: () => boolean): VoicingSource {
     label: 'Shelf',
     unavailable: () => (signedIn() ? null : 'Sign in to compare with voicings on your shelf.'),
     searchable: true,
-    async page(after) {
-      const { voicings, next } = await listShelf({ ...(after !== null && { after }) });
+    async page(search, after) {
+      const asked = { ...(search !== '' && { search }), ...(after !== null && { after }) };
+      const { voicings, next } = await listShelf(asked);
       return { groups: voicings.map(groupOf), next };
     },
     open: () => Promise.resolve(null),

@@ -28,7 +28,7 @@ export function versionsSource(openId: () => string | null): VoicingSource {
     label: 'Versions',
     unavailable: () => (openId() === null ? 'A study of your own has versions once it is saved.' : null),
     searchable: false,
-    async page(after) {
+    async page(_search, after) {
       const studyId = openId();
       if (studyId === null) return { groups: [], next: null };
       const before = after === null ? undefined : Number(after);
