@@ -12,7 +12,7 @@ const [TOKEN, CORNER, SIGN, LETTER] = [1.5, 0.25, 0.62, 0.62] as const;
 /** A little air between tokens over each other. */
 const AIR = 1.08;
 /** Of a lane, from its edge to the middle of its outermost tokens. */
-const EDGE = 0;
+const EDGE = 0.05;
 /** A lane is at least so many sizes of a token's type wide. */
 const LANE = 3.4;
 const HALF_TONE = 0.5;
