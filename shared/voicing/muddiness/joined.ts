@@ -51,7 +51,7 @@ function spectrumAtMf(voice: Joinable): readonly Partial[] | undefined {
  * @returns one voice for each pitch, low to high
  */
 export function joinUnisons(voices: readonly Joinable[], a4Hz: Hertz): readonly JoinedVoice[] {
-  const rising = voices.map((voice, index) => ({ voice, index })).sort((a, b) => a.voice.f0Hz - b.voice.f0Hz);
+  const rising = voices.map((voice, index) => ({ voice, index })).sort(byPitch);
   const groups: Member[][] = [];
   for (const entry of rising) {
     const group = groups.at(-1);
@@ -60,6 +60,16 @@ export function joinUnisons(voices: readonly Joinable[], a4Hz: Hertz): readonly 
     else groups.push([entry]);
   }
   return groups.map((group) => joined(group, a4Hz));
+}
+
+/** Low to high; voices in unison in an order of their own, so that the chord's cannot change a digit. */
+function byPitch({ voice: a }: Member, { voice: b }: Member): number {
+  return a.f0Hz - b.f0Hz || a.nominalDb - b.nominalDb || compareText(a.toneKey, b.toneKey);
+}
+
+function compareText(a: string, b: string): number {
+  if (a === b) return 0;
+  return a < b ? -1 : 1;
 }
 
 /**
