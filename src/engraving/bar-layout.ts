@@ -1,5 +1,5 @@
 import type { Bar, Moment, ScorePlan } from '#shared/notation/score-plan';
-import type { StaffEvent, StaffSketch, StaffText } from '@/engraving/draw-staff';
+import type { StaffEvent, StaffSketch, StaffText } from '@/engraving/staff-sketch';
 import { hasStem } from '@/engraving/note-shapes';
 import { accidentalRoom } from '@/engraving/room-before';
 import { staffExtents, LINE, type Extents } from '@/engraving/staff-extents';

@@ -1,6 +1,6 @@
 import type { SystemPlan } from '#shared/notation/system-plan';
 import type { NoteValue } from '#shared/notation/note-values';
-import type { StaffEvent, StaffSketch, StaffText } from '@/engraving/draw-staff';
+import type { StaffEvent, StaffSketch, StaffText } from '@/engraving/staff-sketch';
 import { hasStem } from '@/engraving/note-shapes';
 import { accidentalRoom } from '@/engraving/room-before';
 import { LINE, staffExtents } from '@/engraving/staff-extents';

@@ -5,7 +5,7 @@ import { midiOfName } from '#shared/pitch/names';
 import { newStudy } from '#shared/study/new-study';
 import { pitchAxis } from '@/charts/pitch-axis';
 import SystemPane from '@/components/system/SystemPane.vue';
-import type { StaffSketch } from '@/engraving/draw-staff';
+import type { StaffSketch } from '@/engraving/staff-sketch';
 import { chordOf } from '../../support/typed-chords';
 
 /** Which staves were drawn, by their width and clef; the engraver itself needs a browser's fonts. */
