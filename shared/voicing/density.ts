@@ -68,7 +68,7 @@ export function densityOfChord(
 }
 
 /** The level of the loudest partial of each band. */
-function loudestByBand({ bands, levels }: HeardPartials): Float64Array {
+export function loudestByBand({ bands, levels }: HeardPartials): Float64Array {
   const loudest = new Float64Array(MOST_BANDS).fill(-Infinity);
   for (let place = 0; place < levels.length; place += 1) {
     const band = bands[place] ?? 0;

@@ -3,13 +3,13 @@ import type { SoundSettings } from '#shared/voicing/analysis';
 
 /** What of a study its sound, and what is said of it, depend on besides the chords. */
 export function soundSettingsOf(
-  study: Pick<StudyDocument, 'a4Hz' | 'intonation' | 'ensemble' | 'key' | 'limits'>,
+  study: Pick<StudyDocument, 'a4Hz' | 'intonation' | 'ensemble' | 'key'> & Pick<SoundSettings, 'limits'>,
 ): SoundSettings {
   return {
     a4Hz: study.a4Hz,
     intonation: study.intonation,
     ensemble: study.ensemble,
     key: { tonic: study.key.tonic },
-    limits: study.limits,
+    limits: study.limits ?? null,
   };
 }

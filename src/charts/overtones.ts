@@ -3,6 +3,7 @@ import { displayPitch, type NoteNaming } from '#shared/pitch/display';
 import { SECTION_FACTS, type Section } from '#shared/strings/sections';
 import type { Decibels, Midi } from '#shared/units';
 import type { VoiceSound } from '#shared/voicing/analysis';
+import { heardNumbers } from '#shared/voicing/heard';
 import { hertzText, sentence } from '#shared/voicing/words';
 import type { PitchAxis } from '@/charts/pitch-axis';
 
@@ -33,16 +34,21 @@ export interface Tick {
   /** Under the chord's loudest partial. */
   readonly level: Decibels;
   readonly y: number;
+  /** Above the threshold in quiet and not masked by the rest of the chord. */
+  readonly heard: boolean;
 }
 
 /** What lies further under the loudest partial is not drawn: it is not heard beside it. */
 export const FLOOR_DB: Decibels = -60;
 const TICK_STEP_DB = 20;
 /** Room for the mark of a fundamental at 0 dB. */
-const ROOM_DB = 4;
+export const ROOM_DB = 4;
 /** Height of the level scale with its title, in pixels: the chart area above it is the axis, to the pixel. */
 export const SCALE_HEIGHT = 40;
-const FAINT = '40';
+const FAINT = '30';
+/** A masked partial is paler than a heard one, and broken. */
+const MASKED = '80';
+const MASKED_DASH = [2, 2];
 const POINTS_PER_TICK = 3;
 const MARKS: Readonly<Record<Section, PointStyle>> = {
   violin1: 'circle',
@@ -58,13 +64,19 @@ export function loudestOf(voices: readonly VoiceSound[]): Decibels {
 }
 
 /** Longest first, so that where partials coincide the shorter ones stay in sight. */
-function ticksOf({ voices, axis, midiOf }: OvertonesInput): readonly Tick[] {
+export function ticksOf({
+  voices,
+  axis,
+  midiOf,
+}: Pick<OvertonesInput, 'voices' | 'axis' | 'midiOf'>): readonly Tick[] {
   const loudest = loudestOf(voices);
+  const heard = heardNumbers(voices);
   return voices
     .flatMap((voice) =>
       voice.partials.map(({ n, frequencyHz, levelDb }) => ({
         ...{ voice, n, frequencyHz, level: levelDb - loudest },
         y: axis.yOf(midiOf(frequencyHz)),
+        heard: heard.get(voice.id)?.has(n) ?? false,
       })),
     )
     .filter(({ level }) => level > FLOOR_DB)
@@ -93,8 +105,11 @@ function lineOf(tick: Tick): TickPoint[] {
 export function overtonesData(input: OvertonesInput): ChartData<'scatter', TickPoint[]> {
   const ticks = ticksOf(input);
   const { colours, emphasised } = input;
-  const colourOf = ({ voice }: Tick): string =>
-    colours.sections[voice.section] + (emphasised.length === 0 || emphasised.includes(voice.id) ? '' : FAINT);
+  const strengthOf = ({ voice, heard }: Tick): string => {
+    if (emphasised.length > 0 && !emphasised.includes(voice.id)) return FAINT;
+    return heard ? '' : MASKED;
+  };
+  const colourOf = (tick: Tick): string => colours.sections[tick.voice.section] + strengthOf(tick);
   const tickAt = (index: number): Tick | undefined => ticks[Math.floor(index / POINTS_PER_TICK)];
   const fundamentals = ticks.filter(({ n }) => n === 1);
   return {
@@ -119,6 +134,7 @@ export function overtonesData(input: OvertonesInput): ChartData<'scatter', TickP
             const tick = tickAt(p0DataIndex);
             return tick && colourOf(tick);
           },
+          borderDash: ({ p0DataIndex }) => (tickAt(p0DataIndex)?.heard === false ? MASKED_DASH : undefined),
           borderWidth: ({ p0DataIndex }) => (tickAt(p0DataIndex)?.n === 1 ? 3 : 1.5),
         },
       },
@@ -128,10 +144,12 @@ export function overtonesData(input: OvertonesInput): ChartData<'scatter', TickP
 
 /** @returns what is told of the partial under the pointer */
 export function partialText(tick: Tick, naming: NoteNaming): string {
-  const { voice, n, frequencyHz, level } = tick;
+  const { voice, n, frequencyHz, level, heard } = tick;
   const which = n === 1 ? 'fundamental' : `partial ${n}`;
   const note = `${SECTION_FACTS[voice.section].plural} ${displayPitch(voice.pitch, naming)}`;
-  return sentence(`${note}, ${which}: ${hertzText(frequencyHz)}, ${levelText(level)}`);
+  return sentence(
+    `${note}, ${which}: ${hertzText(frequencyHz)}, ${levelText(level)}${heard ? '' : ', masked'}`,
+  );
 }
 
 /** @returns a level under the loudest partial with a true minus sign: `−12 dB` */

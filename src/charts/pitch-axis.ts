@@ -1,4 +1,5 @@
 import type { Midi } from '#shared/units';
+import type { AxisView } from '@/charts/axis-view';
 
 /** The one pitch axis of the bench: the same pitch at the same height in every pane. */
 export interface PitchAxis {
@@ -25,16 +26,29 @@ const ROOM = 1.5;
 const STRIP_TOP: Midi = 123.5;
 const OCTAVE = 12;
 
+/** @returns the whole axis: the default span, and wherever a note lies further out */
+export function wholeView(notes: readonly Midi[]): AxisView {
+  return {
+    low: Math.min(DEFAULT_SPAN.low, ...notes.map((midi) => midi - ROOM)),
+    high: Math.max(DEFAULT_SPAN.high, ...notes.map((midi) => midi + ROOM)),
+  };
+}
+
 /**
  * @param notes of the chord, in MIDI numbers: the axis makes room for the lowest and highest
  * @param height of strip and axis together, in pixels, more than the strip's
  * @param strip height of the strip above, in pixels
+ * @param view what of the axis is shown; all of it unless given
  * @returns the axis
  * @example pitchAxis([], 500, 40).yOf(96.5) // 40
  */
-export function pitchAxis(notes: readonly Midi[], height: number, strip: number): PitchAxis {
-  const low = Math.min(DEFAULT_SPAN.low, ...notes.map((midi) => midi - ROOM));
-  const high = Math.max(DEFAULT_SPAN.high, ...notes.map((midi) => midi + ROOM));
+export function pitchAxis(
+  notes: readonly Midi[],
+  height: number,
+  strip: number,
+  view: AxisView = wholeView(notes),
+): PitchAxis {
+  const { low, high } = view;
   const semitone = (height - strip) / (high - low);
   const squeezed = strip / Math.max(STRIP_TOP - high, 1);
   const yOf = (midi: Midi): number =>

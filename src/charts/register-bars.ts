@@ -28,7 +28,7 @@ export function registerBars({ muddiness }: ChordAnalysis, axis: PitchAxis): rea
   return REGISTER_BOUNDS.flatMap(({ register, low, high }) => {
     const index = Math.round(indexOf.get(register) ?? 0);
     const [bottom, top] = [Math.max(low, axis.low), Math.min(high, axis.high)];
-    if (top - bottom < LEAST_SHOWN && index === 0) return [];
+    if (top <= bottom || (top - bottom < LEAST_SHOWN && index === 0)) return [];
     const y = axis.yOf(Math.max((bottom + top) / 2, axis.low));
     const cloudiest = muddiness.register === register && index > 0;
     return [{ register, name: register, index, colour: siltColour(index), y, cloudiest }];

@@ -96,6 +96,7 @@ export function spacingOf(
   const neighbours = Math.max(analysis.voices.length - 1, 0);
   const placed: Placed[] = [];
   pairsOf(analysis).forEach(([lower, upper], index) => {
+    if (upper.midi < axis.low || lower.midi > axis.high) return;
     const [top, bottom] = [axis.yOf(upper.midi), axis.yOf(lower.midi)];
     const below = under.get(`${lower.id} ${upper.id}`)?.semitonesBelow ?? 0;
     const column =

@@ -14,7 +14,14 @@ export type NumberedAnswer =
   | { readonly number: number; readonly fault: string };
 
 function answerTo(asked: NumberedQuestion): Judgements[JudgementKind]['answer'] {
-  return asked.kind === 'moves' ? JUDGE.moves(asked.question) : JUDGE.limits(asked.question);
+  switch (asked.kind) {
+    case 'moves':
+      return JUDGE.moves(asked.question);
+    case 'limits':
+      return JUDGE.limits(asked.question);
+    case 'siltline':
+      return JUDGE.siltline(asked.question);
+  }
 }
 
 self.addEventListener('message', ({ data }: MessageEvent<NumberedQuestion>) => {

@@ -3,6 +3,7 @@ import type { SoundSettings } from '#shared/voicing/analysis';
 import { modelLimits, type ModelLimit } from '#shared/voicing/model-limits';
 import { weighedMoves, type WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import type { SectionPair } from '#shared/voicing/section-pairs';
+import { siltlineMap, type SiltlineExtent, type SiltlineMap } from '#shared/voicing/siltline-map';
 
 /** What takes longer than a frame and is therefore asked of a worker. */
 export interface Judgements {
@@ -11,6 +12,10 @@ export interface Judgements {
     readonly answer: readonly WeighedMove[];
   };
   readonly limits: { readonly question: SectionPair; readonly answer: readonly ModelLimit[] };
+  readonly siltline: {
+    readonly question: { readonly pair: SectionPair; readonly extent: SiltlineExtent };
+    readonly answer: SiltlineMap;
+  };
 }
 
 export type JudgementKind = keyof Judgements;
@@ -21,4 +26,5 @@ export const JUDGE: {
 } = {
   moves: ({ chord, settings }) => weighedMoves(chord, settings),
   limits: modelLimits,
+  siltline: ({ pair, extent }) => siltlineMap(pair, extent),
 };

@@ -67,9 +67,9 @@ export interface LimitNote {
 }
 
 /** Further from the chart nobody has set a limit: our own choice. */
-const AROUND: Semitones = 12;
+const AROUND: Semitones = 18;
 
-/** @returns the notes that can be an interval's limit, low to high, spelt by the key: an octave round the chart's */
+/** @returns the notes that can be an interval's limit, low to high, spelt by the key: an octave and a half round the chart's */
 export function limitNotes(
   { chartMidi, own }: Pick<LimitRow, 'chartMidi' | 'own'>,
   key: SpellingKey,

@@ -2,8 +2,6 @@ import { computed, shallowRef, watch } from 'vue';
 import type { NoteNaming } from '#shared/pitch/display';
 import { comfortableReach } from '#shared/study/reach';
 import type { Chord } from '#shared/study/study.document';
-import { reachOf } from '#shared/voicing/reach.sentences';
-import { factsOf } from '#shared/voicing/voice.sentences';
 import { limitInForce, limitText } from '#shared/voicing/limits.sentences';
 import type { WeighedMove } from '#shared/voicing/moves/weighed-moves';
 import { analysisOf } from '@/composables/analysis';
@@ -11,6 +9,7 @@ import { useModelLimits } from '@/composables/model-limits';
 import { useProgressionAnalyses } from '@/composables/progression-analyses';
 import type { NotePair } from '@/components/findings/Findings.vue';
 import { useChordTelling } from '@/pages/lab/chord-telling';
+import { usePlayingView } from '@/pages/lab/playing-view';
 import type { useBenchStore } from '@/stores/bench.store';
 
 /** What the bench shows of the chord that is selected. */
@@ -26,12 +25,7 @@ export function useBenchView(
   );
   const telling = useChordTelling(bench, chord, () => analysis.value, naming);
   const reach = computed(() => comfortableReach(bench.study.ensemble.bass));
-  const outOfReach = computed(() =>
-    chord()
-      .voices.map((voice) => reachOf(voice, bench.study.ensemble.bass, bench.study.key, naming()))
-      .filter(({ lying }) => lying === 'beyond'),
-  );
-  const voiceFacts = computed(() => factsOf(analysis.value.voices.find(({ id }) => id === bench.voiceId)));
+  const playing = usePlayingView(bench, chord, () => analysis.value, naming);
   const progression = computed(() =>
     bench.study.chords.map(({ id, beats }) => ({
       ...{ chordId: id, beats },
@@ -77,5 +71,5 @@ export function useBenchView(
   watch(chord, () => (shownMove.value = null));
 
   const pointing = { ...telling, shownLimit, limitOf, shown, shownMove, markedIds, show };
-  return { analysis, analyses, reach, outOfReach, voiceFacts, progression, ...pointing };
+  return { analysis, analyses, reach, ...playing, progression, ...pointing };
 }
