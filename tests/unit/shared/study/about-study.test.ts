@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { aboutStudy } from '#shared/study/about-study';
-import { cloudiest } from '#shared/study/cloudiest';
+import { aboutStudy, keyName } from '#shared/study/about-study';
 import { newStudy } from '#shared/study/new-study';
 
 describe('aboutStudy', () => {
@@ -18,10 +17,8 @@ describe('aboutStudy', () => {
   });
 });
 
-describe('cloudiest', () => {
-  it('when all chords are known, then it is the largest; before, there is none', () => {
-    expect(cloudiest([12, 58, 40])).toBe(58);
-    expect(cloudiest([12, null])).toBeNull();
-    expect(cloudiest([])).toBeNull();
+describe('keyName', () => {
+  it('when a tonic has a sign, then the key is called with it', () => {
+    expect(keyName({ tonic: 'Bb', mode: 'minor' })).toBe('B♭ minor');
   });
 });
