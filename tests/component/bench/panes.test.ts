@@ -1,9 +1,14 @@
 import { mount } from '@vue/test-utils';
 import { describe, expect, it } from 'vitest';
 import { pitchAxis } from '@/charts/pitch-axis';
+import AxisZoom from '@/components/bench/AxisZoom.vue';
 import MuddinessPane from '@/components/bench/MuddinessPane.vue';
+import OpenStrings from '@/components/bench/OpenStrings.vue';
 import OvertonesTable from '@/components/bench/OvertonesTable.vue';
+import OvertonesTitle from '@/components/bench/OvertonesTitle.vue';
+import SeriesOverlay from '@/components/bench/SeriesOverlay.vue';
 import SpacingPane from '@/components/bench/SpacingPane.vue';
+import { useAxisView } from '@/composables/axis-view';
 import { analysisOf, soundsOf } from '../../support/made-up-analyses';
 import { chordOf } from '../../support/typed-chords';
 
@@ -65,5 +70,59 @@ describe('the spacing pane', () => {
     expect(wrapper.findAll('.mark text').map((mark) => mark.text())).toEqual(['chart B♭2', 'model F2']);
     await bracket.trigger('click');
     expect(wrapper.emitted('ask')?.at(-1)).toEqual([null]);
+  });
+});
+
+describe('the series of one note', () => {
+  it('when a note is pointed at, then its partials are numbered and what they meet is read out', () => {
+    const voices = soundsOf(chordOf('Vc A2 E3'));
+    const midiOf = (hertz: number) => 69 + 12 * Math.log2(hertz / 440);
+    const wrapper = mount(SeriesOverlay, {
+      props: { voices, id: 'note-1', axis, midiOf, naming: 'english' },
+    });
+    expect(wrapper.findAll('.numbers text').map((text) => text.text())).toEqual(['1', '2', '3']);
+    expect(wrapper.findAll('li').map((item) => item.text())).toContain(
+      'Partial 3, 330 Hz, meets partial 2 of the cellos’ E3, together.',
+    );
+  });
+});
+
+describe('what the overtones pane shows', () => {
+  it('when the open strings are asked for, then the plot gives way, and comes back', async () => {
+    const wrapper = mount(OvertonesTitle, { props: { modelValue: 'plot', covered: false } });
+    const strings = wrapper.findAll('button').find((button) => button.text() === 'Open strings');
+    await strings?.trigger('click');
+    await wrapper.setProps({ modelValue: 'strings' });
+    expect(strings?.attributes('aria-pressed')).toBe('true');
+    await strings?.trigger('click');
+    expect(wrapper.emitted('update:modelValue')).toEqual([['strings'], ['plot']]);
+  });
+
+  it('when a chord has an E, then the fifth partial of the cellos’ C string is offered, 14 cents low', () => {
+    const wrapper = mount(OpenStrings, {
+      props: {
+        ...{ voices: soundsOf(chordOf('Vn1 E4')), bass: 'four-string', a4Hz: 440, height: 300 },
+        ...{ spelling: { tonic: 'C', mode: 'major' }, naming: 'english' },
+      },
+    });
+    const rows = wrapper.findAll('tbody tr').map((row) => row.text());
+    expect(rows.some((row) => /E4, −14 cents.*in this chord.*cellos C2\s*5/.test(row))).toBe(true);
+  });
+});
+
+describe('the view of the pitch axis', () => {
+  it('when it comes closer, then the way back and what is out of sight are told', async () => {
+    const notes = [28, 64];
+    const viewing = useAxisView(() => notes);
+    const wrapper = mount(AxisZoom, { props: { axis, notes, viewing }, global: { stubs: { QIcon: true } } });
+    await wrapper.get('[aria-label="Closer"]').trigger('click');
+    expect(viewing.zoomed.value).toBe(true);
+    await wrapper.setProps({ axis: pitchAxis(notes, 500, 40, { low: 40, high: 70 }) });
+    expect(wrapper.get('[role="status"]').text()).toBe('out of sight: 1 below');
+    await wrapper
+      .findAll('button')
+      .find((button) => button.text() === 'All')
+      ?.trigger('click');
+    expect(viewing.zoomed.value).toBe(false);
   });
 });
