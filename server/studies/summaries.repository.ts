@@ -1,4 +1,4 @@
-import { and, eq, notInArray } from 'drizzle-orm';
+import { and, eq, notInArray, sql } from 'drizzle-orm';
 import { z } from 'zod';
 import { chordProfileSchema } from '#shared/contracts/chord-profiles';
 import type { StudyDocument } from '#shared/study/study.document';
@@ -9,7 +9,7 @@ import { parseJson, readDocument } from '#server/studies/documents';
 
 const summarySchema = z.array(
   chordProfileSchema.extend({
-    /** Digest of what the figures depend on: a chord that is as it was is not judged again. */
+    /** The model's edition, a dot, and a digest of the chord and its settings: what is as it was is not judged again. */
     of: z.string(),
   }),
 );
@@ -58,4 +58,17 @@ export async function keepSummary(db: Connection, { id, number }: DueStudy, summ
     .update(studies)
     .set({ summary, cloudiest, summaryDue: false })
     .where(and(eq(studies.id, id), eq(studies.newestNumber, number)));
+}
+
+/** Studies that another edition of the model summed up are due again. */
+export async function markOutdated(db: Connection, edition: string): Promise<void> {
+  await db
+    .update(studies)
+    .set({ summaryDue: true })
+    .where(
+      and(
+        eq(studies.summaryDue, false),
+        sql`coalesce(json_value(${studies.summary}, '$[0].of'), '') not like ${`${edition}.%`}`,
+      ),
+    );
 }

@@ -3,7 +3,7 @@ import type { RowDataPacket } from 'mysql2/promise';
 import { expect, test } from 'vitest';
 import type { StudyRow } from '#shared/contracts/studies';
 import type { StudyDocument } from '#shared/study/study.document';
-import { summariseDue } from '#server/studies/summaries';
+import { beginEdition, summariseDue } from '#server/studies/summaries';
 import { createTestApp } from '../support/app';
 import { enter, type Person } from '../support/people';
 import { documentOf, makeStudy, saveOf, shareWith } from '../support/studies';
@@ -79,7 +79,7 @@ test('when studies are summed up, then rows carry their profiles and can be sort
   const { id } = await makeStudy(ada, voiced('Low third', 'C2', 'E2'));
   const before = (await ada.send('GET', '/api/studies')).body.studies[0];
   expect(before).toMatchObject({ cloudiest: null, summedUp: false, chords: [] });
-  await summariseDue(at.deps);
+  await summariseDue(at.deps, await beginEdition(at.deps));
   const [first, second]: StudyRow[] = (await ada.send('GET', '/api/studies?sort=clouded')).body.studies;
   expect([first?.title, second?.title]).toEqual(['Low third', 'High fifth']);
   expect(first).toMatchObject({ summedUp: true, chordCount: 1 });
@@ -91,10 +91,27 @@ test('when studies are summed up, then rows carry their profiles and can be sort
   expect(await titles(ada, 'sort=clouded&order=asc')).toEqual(['High fifth', 'Low third']);
 
   await ada.send('PUT', `/api/studies/${id}`, saveOf(voiced('Low third', 'C4', 'G4'), 1));
-  await summariseDue(at.deps);
+  await summariseDue(at.deps, await beginEdition(at.deps));
   const rows: StudyRow[] = (await ada.send('GET', '/api/studies?sort=title')).body.studies;
   expect(rows[1]?.cloudiest).toBe(rows[0]?.cloudiest);
-});
+}, 60_000);
+
+test('when the model has changed since, then what the earlier one said is due again', async () => {
+  const at = await createTestApp();
+  const ada = await enter(at);
+  await makeStudy(ada, voiced('Low third', 'C2', 'E2'));
+  const summedUp = async () => (await ada.send('GET', '/api/studies')).body.studies[0].summedUp;
+  await summariseDue(at.deps, await beginEdition(at.deps));
+  await beginEdition(at.deps);
+  expect(await summedUp()).toBe(true);
+  await at.deps.pool.query(
+    "update studies set summary = json_set(summary, '$[0].of', 'earlier.0'), cloudiest = 3",
+  );
+  await beginEdition(at.deps);
+  expect(await summedUp()).toBe(false);
+  await summariseDue(at.deps, await beginEdition(at.deps));
+  expect((await ada.send('GET', '/api/studies')).body.studies[0].cloudiest).toBeGreaterThan(50);
+}, 60_000);
 
 test('when lists of any order are read page by page, then each study comes once, in that order', async () => {
   const at = await createTestApp();
