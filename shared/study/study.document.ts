@@ -36,7 +36,11 @@ const idSchema = z.string().regex(/^[A-Za-z0-9_-]{6,36}$/, 'an id has 6 to 36 le
 
 const pitchSchema = z
   .string()
-  .regex(PITCH_PATTERN, 'a pitch is a letter A to G, an accidental and an octave 0 to 8, such as Bb2')
+  .regex(PITCH_PATTERN, {
+    error: 'a pitch is a letter A to G, an accidental and an octave 0 to 8, such as Bb2',
+    // What is no pitch at all is told once.
+    abort: true,
+  })
   .refine((name) => /[0-8]$/.test(name) && !name.includes('-'), 'octaves run from 0 to 8');
 
 /** A note without its octave. */

@@ -11,6 +11,8 @@ test('by mouse, notes are dragged, played otherwise, selected together, copied a
   await page.goto('/');
   await typeNotes(page, 'DB D2, Vc A2 F3');
 
+  // Hovering waits until nothing moves any more.
+  await note(page, 'F3').hover();
   const box = await note(page, 'F3').boundingBox();
   if (!box) throw new Error('F3 is not on the bench');
   const [x, y] = [box.x + box.width / 2, box.y + box.height / 2];

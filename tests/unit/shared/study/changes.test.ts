@@ -110,6 +110,13 @@ describe('changes of a chord', () => {
   });
 });
 
+describe('a pitch of the document', () => {
+  it.each(['C', 'H2', 'C9', 'C-1'])('when %s stands there, then one fault is told', (pitch) => {
+    const voices = [{ ...bass, pitch }];
+    expect(chordSchema.safeParse({ ...chord, voices }).error?.issues).toHaveLength(1);
+  });
+});
+
 describe('changes of a study', () => {
   const study = changeChord(newStudy('chord-1'), 'chord-1', () => chord);
 
