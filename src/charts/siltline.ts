@@ -28,10 +28,10 @@ const STRATA = [75, 50, 25, 0] as const;
 const LINE = 50;
 /** The intervals that a reader finds his way by. */
 const MARKS = [
-  { semitones: 4, label: '3rd' },
-  { semitones: 7, label: '5th' },
-  { semitones: 12, label: '8ve' },
-  { semitones: 19, label: '12th' },
+  { semitones: 4, label: '3' },
+  { semitones: 7, label: '5' },
+  { semitones: 12, label: '8' },
+  { semitones: 19, label: '12' },
 ] as const;
 const HALF = 0.5;
 

@@ -25,7 +25,7 @@ function pinchOf({ touches }: TouchEvent): Pinch | null {
 }
 
 /**
- * Zooms and pans the pitch axis: the wheel with Ctrl, two fingers, and the keys +, −, 0 and F.
+ * Zooms and pans the pitch axis: the wheel with Ctrl, two fingers, and the keys +, −, 0 and Z.
  * @param panes that stand on the axis
  */
 export function useAxisGestures(
@@ -63,7 +63,7 @@ export function useAxisGestures(
     '=': () => viewing.zoom(ZOOM_STEP),
     '-': () => viewing.zoom(1 / ZOOM_STEP),
     '0': viewing.showAll,
-    f: viewing.fit,
+    z: viewing.fit,
   };
 
   function key(event: KeyboardEvent): void {

@@ -42,7 +42,7 @@ const NAMES: Readonly<Record<string, string>> = {
  */
 export function limitRows(own: readonly OwnLimit[] | null, naming: NoteNaming): readonly LimitRow[] {
   const inForce = limitsInForce(own);
-  const key = { tonic: 'Bb', mode: 'major' } as const;
+  const key = { tonic: 'F', mode: 'major' } as const;
   const name = (midi: Midi): string => displayPitch(pitchName(spellIn(midi, key)), naming);
   return LOW_INTERVAL_LIMITS.map(({ interval, semitones, lowest, lowestMidi, spread }) => {
     const now = inForce.find((limit) => limit.semitones === semitones)?.lowestMidi ?? null;
