@@ -42,6 +42,8 @@ const SYMBOL_LINE =
   /^\s*(?<symbol>[^\s,;:|[\]]+)(?:\s+(?<way>open|closed?|series|overtones?)(?:\s+position)?)?\s*$/iu;
 /** A word with one of these figures is taken for a chord, for C6 and C7 are rare as notes and common as chords. */
 const CHORD_FIGURES = /[67]$/u;
+/** Two sections are written like flats: DB and Cb. */
+const FLAT = /^[A-Ga-g]b$/u;
 /** Notes joined in the word are a double stop. */
 const JOINED = /\d\+\S/u;
 
@@ -60,7 +62,9 @@ function readAlone(word: string, { naming, key }: LineContext): ReadHarmony | nu
   if (JOINED.test(word)) return null;
   const numeral = readNumeral(word, key);
   if (numeral && 'harmony' in numeral) return numeral;
-  if (readSection(word, 0)?.end === word.length) return null;
+  // DB are the double basses, Db is D flat.
+  const isSection = readSection(word, 0)?.end === word.length;
+  if (isSection && !FLAT.test(word)) return null;
   const isNote = 'pitch' in readPitch(word, naming);
   if (isNote && !CHORD_FIGURES.test(word)) return null;
   const symbol = readChordSymbol(word, naming);

@@ -27,6 +27,8 @@ describe('whether a word is a chord or a note', () => {
   it.each([
     ['Dm7', 'Dm7'],
     ['C', 'C'],
+    ['Db', 'Db'],
+    ['Cb', 'Cb'],
     ['C6', 'C6'],
     ['C7', 'C7'],
     ['Eb6/9', 'Eb6/9'],
@@ -58,6 +60,7 @@ describe('whether a word is a chord or a note', () => {
     [' G/X', 'X', 'bass'],
     ['V8', 'V8', 'section'],
     ['Vc', 'Vc', 'No note follows'],
+    ['DB', 'DB', 'No note follows'],
   ])('when “%s” is typed, then “%s” is told', (text, place, words) => {
     const [fault] = read(text).faults;
     expect(text.slice(fault?.start, fault?.end)).toBe(place);
