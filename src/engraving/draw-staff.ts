@@ -34,10 +34,12 @@ function drawClef(engraver: Engraver, stave: Stave, context: RenderContext, clef
 }
 
 function headsOf(note: StaveNote, { chord }: StaffEvent): readonly DrawnHead[] {
+  const width = note.getGlyphWidth();
   return (chord?.notes ?? []).map(({ voiceId }, index) => {
-    const head = note.noteHeads[index];
-    const left = head?.getAbsoluteX() ?? note.getNoteHeadBeginX();
-    return { voiceId, left, right: left + note.getGlyphWidth(), y: note.getYs()[index] ?? 0 };
+    // A drawn head cannot be asked: one set to the other side of the stem would count its shift twice.
+    const aside = note.noteHeads[index]?.isDisplaced() ? width * note.getStemDirection() : 0;
+    const left = note.getNoteHeadBeginX() + aside;
+    return { voiceId, left, right: left + width, y: note.getYs()[index] ?? 0 };
   });
 }
 
