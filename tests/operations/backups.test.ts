@@ -41,7 +41,7 @@ async function backUp(name: string): Promise<string> {
 }
 
 async function titles(): Promise<readonly string[]> {
-  return (await studiesOf(await enterDemo(product.url))).map(({ document }) => document.title);
+  return (await studiesOf(await enterDemo(product.url))).map(({ title }) => title);
 }
 
 test('when a backup is restored while the program runs, then it holds what it held then and everybody is signed out', async () => {

@@ -1,7 +1,7 @@
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { chromium, type Browser, type CDPSession, type Page } from '@playwright/test';
+import { chromium, type Browser, type CDPSession } from '@playwright/test';
 import { startProduct } from '../support/product';
 import { framesWhileDragging, type FrameFigures } from './frames';
 
@@ -38,7 +38,7 @@ function say(what: string, figure: string, mark: string): void {
 }
 
 /** Every script and style that is fetched, with the bytes that came over the wire. */
-async function countCode(page: Page, session: CDPSession) {
+async function countCode(session: CDPSession) {
   const paths = new Map<string, string>();
   const files: { path: string; bytes: number }[] = [];
   session.on('Network.responseReceived', ({ requestId, response, type }) => {
@@ -57,7 +57,7 @@ async function firstVisit(browser: Browser, url: string): Promise<FirstVisit> {
   const context = await browser.newContext({ viewport: { width: 1440, height: 900 } });
   const page = await context.newPage();
   const session = await context.newCDPSession(page);
-  const files = await countCode(page, session);
+  const files = await countCode(session);
   await session.send('Emulation.setCPUThrottlingRate', { rate: SLOWED });
   await session.send('Network.emulateNetworkConditions', { offline: false, ...FAST_3G });
   const began = performance.now();
