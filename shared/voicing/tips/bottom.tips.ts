@@ -17,11 +17,11 @@ function lowestOf(interval: string, naming: NoteNaming): string {
 /** Why the bottom stands wide. */
 export const LOW_THIRD: Tip = {
   id: 'low-third',
-  source: `${COMMON_PRACTICE}; the order of the harmonic series`,
+  source: `${COMMON_PRACTICE}; the harmonic series`,
   says({ analysis, naming }) {
     const pair = intervalUnder(analysis, THIRDS);
     if (!pair) return null;
-    return `${notesText(pair, naming)}: a third. The harmonic series starts with an octave and a fifth, and its first third lies two octaves up: hence a wide bottom, close notes above.`;
+    return `${notesText(pair, naming)}: a third. The harmonic series has its first third two octaves up: hence a wide bottom, close notes above.`;
   },
 };
 
@@ -50,12 +50,12 @@ export const LOW_SECOND: Tip = {
 /** Why the octave of basses and cellos is the usual bottom. */
 export const CELLOS_OVER_BASSES: Tip = {
   id: 'cellos-over-basses',
-  source: `${COMMON_PRACTICE}; the octave’s partials: the harmonic series`,
+  source: `${COMMON_PRACTICE}; the harmonic series`,
   says({ analysis }) {
     const [bottom, next] = pitchedUpwards(analysis.voices);
     const isOctave = bottom && next && next.midi - bottom.midi === OCTAVE;
     if (!isOctave || bottom.section !== 'doubleBass' || next.section !== 'cello') return null;
-    return 'Cellos an octave over the basses: all their overtones fall on the basses’, so the line gains body and edge, and the two do not cloud each other.';
+    return 'Cellos an octave over the basses: their overtones all fall on the basses’, so the line gains body and edge, and the two do not cloud.';
   },
 };
 
@@ -66,6 +66,6 @@ export const BASSES_SOUND_LOWER: Tip = {
   says({ analysis, naming }) {
     const bass = analysis.voices.find(({ section }) => section === 'doubleBass');
     if (!bass) return null;
-    return `Double basses sound an octave lower than written. Here notes are named as they sound: the players read this ${displayPitch(bass.pitch, naming)} an octave higher.`;
+    return `Double basses sound an octave lower than written. Notes here are named as they sound: the players read this ${displayPitch(bass.pitch, naming)} an octave higher.`;
   },
 };

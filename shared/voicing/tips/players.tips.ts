@@ -23,7 +23,7 @@ function linesOf(section: Section, { chord, analysis }: TipFacts): readonly numb
 /** What a divided section loses. */
 export const DIVIDED: Tip = {
   id: 'divided',
-  source: 'Players add as 10 lg N: Howard & Angus, Acoustics and Psychoacoustics',
+  source: 'Players add as 10 lg N (Howard & Angus)',
   says(facts) {
     for (const section of SECTIONS) {
       const lines = linesOf(section, facts);
@@ -31,7 +31,7 @@ export const DIVIDED: Tip = {
       if (lines.length < 2 || all < LEAST_DIVIDED) continue;
       const loss = playersGain(all) - playersGain(Math.min(...lines));
       const parts = COUNTS[lines.length] ?? String(lines.length);
-      return `${sentence(`the ${SECTION_FACTS[section].plural}`)} divided in ${parts}: the thinnest line has ${Math.round(loss)} dB less than all of them together.${lines.length === PAIR ? STOP : ''}`;
+      return `${sentence(`the ${SECTION_FACTS[section].plural}`)} divided in ${parts}: the thinnest line has ${Math.round(loss)} dB less than all together.${lines.length === PAIR ? STOP : ''}`;
     }
     return null;
   },
@@ -44,6 +44,6 @@ export const TWO_PLAYERS: Tip = {
   says({ analysis }) {
     const voice = analysis.voices.find(({ players }) => players === PAIR);
     if (!voice) return null;
-    return `${sentence(possessive(voice.section, voice.players))} line has two players. Two are the hardest to tune, since every difference is heard; one alone or three and more are kinder.`;
+    return `${sentence(possessive(voice.section, voice.players))} line has two players: the hardest number to tune, since every difference is heard. One alone, or three, is kinder.`;
   },
 };

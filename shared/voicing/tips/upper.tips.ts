@@ -20,7 +20,7 @@ function melodyOf({ chord, analysis }: TipFacts) {
 /** An octave doubling thickens without a new line. */
 export const OCTAVE_UNDER_MELODY: Tip = {
   id: 'octave-under-melody',
-  source: `${COMMON_PRACTICE}; the octave’s partials: the harmonic series`,
+  source: `${COMMON_PRACTICE}; the harmonic series`,
   says(facts) {
     const melody = melodyOf(facts);
     if (!melody || facts.analysis.voices.length < LEAST_VOICES) return null;
@@ -28,7 +28,7 @@ export const OCTAVE_UNDER_MELODY: Tip = {
       ({ midi, id }) => id !== melody.id && midi === melody.midi - OCTAVE,
     );
     if (!under || under.midi < MELODY_FROM) return null;
-    return `${displayPitch(under.pitch, facts.naming)} doubles the melody an octave below: every overtone of the melody falls on one of its own, so the tune grows warmer without a new line to follow.`;
+    return `${displayPitch(under.pitch, facts.naming)} doubles the melody an octave below: the melody’s overtones all fall on its own, so the tune grows warmer without a new line to follow.`;
   },
 };
 
