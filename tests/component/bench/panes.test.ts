@@ -115,7 +115,7 @@ describe('the view of the pitch axis', () => {
     const notes = [28, 64];
     const viewing = useAxisView(() => notes);
     const wrapper = mount(AxisZoom, { props: { axis, notes, viewing }, global: { stubs: { QIcon: true } } });
-    await wrapper.get('[aria-label="Closer"]').trigger('click');
+    await wrapper.get('[aria-label="Zoom in"]').trigger('click');
     expect(viewing.zoomed.value).toBe(true);
     await wrapper.setProps({ axis: pitchAxis(notes, 500, 40, { low: 40, high: 70 }) });
     expect(wrapper.get('[role="status"]').text()).toBe('out of sight: 1 below');
