@@ -8,6 +8,9 @@ import { defineConfig, type Plugin } from 'vite';
 /** While developing, the pages are one port below the server. */
 const { PORT: serverPort = '3001', PAGES_PORT: pagesPort = '3000' } = process.env;
 
+/** Classes whose names Quasar's components put together from parts. */
+const PUT_TOGETHER = [/^q-/, /^(bg|text|justify|items|self|content|shadow|fixed|absolute)-[a-z-]+$/];
+
 /** Quasar's style sheet without what neither its own components nor this program's pages can carry. */
 const lighterQuasar: Plugin = {
   name: 'lighter-quasar',
@@ -16,7 +19,7 @@ const lighterQuasar: Plugin = {
     if (!id.endsWith('/quasar/dist/quasar.css')) return null;
     const raw = await readFile(id, 'utf8');
     const content = ['src/**/*.{vue,ts}', 'node_modules/quasar/dist/quasar.client.js'];
-    const [purged] = await new PurgeCSS().purge({ content, css: [{ raw }] });
+    const [purged] = await new PurgeCSS().purge({ content, css: [{ raw }], safelist: PUT_TOGETHER });
     return purged?.css ?? raw;
   },
 };
