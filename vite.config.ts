@@ -27,7 +27,7 @@ const lighterQuasar: Plugin = {
 export default defineConfig({
   plugins: [vue({ template: { transformAssetUrls } }), quasar({ sassVariables: false }), lighterQuasar],
   resolve: { alias: { '@': fileURLToPath(new URL('./src', import.meta.url)) } },
-  optimizeDeps: { include: ['tone', 'chart.js', 'tonal', 'vexflow/core'] },
+  optimizeDeps: { include: ['tone', 'chart.js', 'tonal', 'vexflow/core', 'driver.js'] },
   server: {
     port: Number(pagesPort),
     strictPort: true,

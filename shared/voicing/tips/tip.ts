@@ -1,10 +1,10 @@
 import type { NoteNaming } from '#shared/pitch/display';
-import type { Chord } from '#shared/study/study.document';
+import type { Voice } from '#shared/study/study.document';
 import type { ChordAnalysis } from '#shared/voicing/analysis';
 
 /** What a tip looks at. */
 export interface TipFacts {
-  readonly chord: Pick<Chord, 'voices'>;
+  readonly chord: { readonly voices: readonly Voice[] };
   /** Of the same chord. */
   readonly analysis: Pick<ChordAnalysis, 'voices' | 'limits'>;
   readonly naming: NoteNaming;
