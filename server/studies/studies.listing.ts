@@ -4,7 +4,7 @@ import type { QueryOf } from '#shared/contracts/endpoint';
 import type { listStudies, StudySort } from '#shared/contracts/studies';
 import type { Connection } from '#server/db/connection';
 import { containing } from '#server/db/like';
-import type { Position } from '#server/db/positions';
+import { momentOf, type Position } from '#server/db/positions';
 import { shares } from '#server/db/schema/shares';
 import { studies } from '#server/db/schema/studies';
 import { studyTags } from '#server/db/schema/study-tags';
@@ -19,8 +19,8 @@ const SORTED_BY: Readonly<Record<StudySort, SQL>> = {
   clouded: sql`${studies.cloudiest}`,
 };
 
-function valueOf(sort: StudySort, value: Position['value']): Position['value'] | Date {
-  return sort === 'changed' ? new Date(Number(value)) : value;
+function valueOf(sort: StudySort, after: Position): Position['value'] | Date {
+  return sort === 'changed' ? momentOf(after) : after.value;
 }
 
 export function isDescending({ sort, order }: Pick<Filters, 'sort' | 'order'>): boolean {
@@ -29,7 +29,7 @@ export function isDescending({ sort, order }: Pick<Filters, 'sort' | 'order'>): 
 
 function behind(filters: Filters, after: Position | null): SQL | undefined {
   if (after === null) return undefined;
-  const [by, value] = [SORTED_BY[filters.sort], valueOf(filters.sort, after.value)];
+  const [by, value] = [SORTED_BY[filters.sort], valueOf(filters.sort, after)];
   const beyond = isDescending(filters) ? sql.raw('<') : sql.raw('>');
   return sql`(${by} ${beyond} ${value} or (${by} = ${value} and ${studies.id} ${beyond} ${after.id}))`;
 }
