@@ -68,7 +68,7 @@ export async function markOutdated(db: Connection, edition: string): Promise<voi
     .where(
       and(
         eq(studies.summaryDue, false),
-        sql`coalesce(json_value(${studies.summary}, '$[0].of'), '') not like ${`${edition}.%`}`,
+        sql`substring_index(coalesce(json_value(${studies.summary}, '$[0].of'), ''), '.', 1) <> ${edition}`,
       ),
     );
 }
