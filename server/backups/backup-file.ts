@@ -80,13 +80,19 @@ export function readBackup(file: string): Readable {
   return text;
 }
 
+function parsed(text: string): unknown {
+  try {
+    return JSON.parse(text);
+  } catch {
+    return null;
+  }
+}
+
 function headOf(file: string, text: string): BackupHead {
   const line = text.split('\n', 1)[0] ?? '';
-  const parsed = line.startsWith(MARK)
-    ? headSchema.safeParse(JSON.parse(line.slice(MARK.length)))
-    : undefined;
-  if (!parsed?.success) throw new NotABackup(`${file} is not a backup of Siltline.`);
-  return parsed.data;
+  const head = headSchema.safeParse(line.startsWith(MARK) ? parsed(line.slice(MARK.length)) : null);
+  if (!head.success) throw new NotABackup(`${file} is not a backup of Siltline.`);
+  return head.data;
 }
 
 /**

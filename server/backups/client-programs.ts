@@ -39,11 +39,12 @@ export async function runClient(
   options: readonly string[],
   tables: readonly string[] = [],
 ): Promise<ClientProgram> {
+  const program = findProgram(name);
   const folder = await mkdtemp(join(tmpdir(), 'siltline-account-'));
   const file = join(folder, 'options.cnf');
   await writeFile(file, optionFile(access), { mode: OWNER_ONLY });
   const words = [`--defaults-file=${file}`, ...options, access.database, ...tables];
-  const child = spawn(findProgram(name), words, { stdio: ['pipe', 'pipe', 'pipe'] });
+  const child = spawn(program, words, { stdio: ['pipe', 'pipe', 'pipe'] });
   let said = '';
   child.stderr.on('data', (part: Buffer) => (said += part.toString()));
   // Its exit says what was wrong; a pipe that closes before that says nothing more.

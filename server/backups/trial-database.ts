@@ -1,4 +1,4 @@
-import { mkdir, mkdtemp, rm } from 'node:fs/promises';
+import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { pipeline } from 'node:stream/promises';
@@ -10,6 +10,9 @@ import { migrateDatabase } from '#server/setup/migration';
 
 const quiet = { onLeftoverStopped: () => undefined, onDied: () => undefined, onRestarted: () => undefined };
 
+/** A file may tell the client to run programs; of a backup nothing but statements is wanted. Older clients pass it over. */
+const STATEMENTS_ONLY = '--loose-sandbox';
+
 /**
  * Loads a backup into a database server of its own, which is gone afterwards, and brings its tables up to date.
  * @param work is given the account that may do everything there
@@ -20,10 +23,9 @@ export async function inTrialDatabase<T>(
 ): Promise<T> {
   const folder = await mkdtemp(join(tmpdir(), 'siltline-trial-'));
   try {
-    await mkdir(folder, { recursive: true });
     const { migration, stop } = await startEmbeddedMariadb(folder, quiet, 'relaxed');
     try {
-      const client = await runClient('mariadb', migration, ['--batch']);
+      const client = await runClient('mariadb', migration, ['--batch', STATEMENTS_ONLY]);
       await pipeline(readBackup(file), client.child.stdin);
       await client.ended;
       await migrateDatabase(migration);
