@@ -36,8 +36,10 @@ export function driveTour(from: number, told: (step: number) => void): DrivenTou
       ...{ stagePadding: 4, stageRadius: 4, overlayOpacity: 0.45, overlayClickBehavior: () => undefined },
       ...{ nextBtnText: 'Next', prevBtnText: 'Back', doneBtnText: 'Done' },
       steps: TOUR_STEPS.map(stepOf),
-      onPopoverRender: ({ wrapper, closeButton, footerButtons }) => {
+      onPopoverRender: ({ wrapper, title, footer, closeButton, footerButtons }) => {
         wrapper.setAttribute('aria-modal', 'true');
+        // Else the box would have the landmarks of a page.
+        for (const part of [title, footer]) part.setAttribute('role', 'none');
         closeButton.textContent = 'Leave';
         closeButton.removeAttribute('aria-label');
         footerButtons.prepend(closeButton);
