@@ -35,17 +35,12 @@ export const SHORTCUTS: readonly Shortcut[] = [
   { group: 'The note', keys: ['←', '→'], does: 'to the section beside' },
   { group: 'The note', keys: ['Page Up', 'Page Down'], does: 'to the next note above or below' },
   { group: 'The note', keys: ['Delete'], does: 'take it away' },
-  { group: 'The note', keys: ['K'], does: 'lock or unlock' },
-  { group: 'The note', keys: ['J'], does: 'join in a double stop, or divide' },
-  { group: 'The note', keys: ['U'], does: 'link at the unison or octave, or unlink' },
-  { group: 'The note', keys: ['P'], does: 'how it is played' },
   {
     group: 'Several notes',
     keys: ['Shift click', 'Shift Page Up', 'Shift Page Down'],
     does: 'select one more',
   },
   { group: 'Several notes', keys: ['Ctrl A'], does: 'select all notes of the chord' },
-  { group: 'Several notes', keys: ['S'], does: 'select all notes of the section' },
   { group: 'Several notes', keys: ['Esc'], does: 'select one alone again' },
   {
     group: 'Several notes',

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { and, asc, eq } from 'drizzle-orm';
 import { expect, test } from 'vitest';
-import { staleDetailsSchema } from '#shared/contracts/studies';
+import { staleDetailsSchema, studySchema } from '#shared/contracts/studies';
 import { saves } from '#server/db/schema/saves';
 import { readDocument } from '#server/studies/documents';
 import { createTestApp, type TestApp } from '../support/app';
@@ -43,7 +43,7 @@ test('when a save began from an older one, then nothing is overwritten and both 
   expect(refused.status).toBe(409);
   expect(refused.body.error.code).toBe('study.stale');
   const details = staleDetailsSchema.parse(refused.body.error.details);
-  const { merged: _, ...study } = newest.body;
+  const study = studySchema.parse(newest.body);
   expect(details).toEqual({ newest: { ...study, savedByName: 'Ada' }, setAsideNumber: 1 });
   expect((await ada.send('GET', `/api/studies/${id}`)).body.document.title).toBe('Theirs');
   expect(await kept(at, id, 'accepted')).toEqual([
