@@ -1,5 +1,5 @@
 import { and, asc, eq, getTableColumns, isNull } from 'drizzle-orm';
-import type { Share } from '#shared/contracts/studies';
+import type { Share } from '#shared/contracts/shares';
 import type { Connection } from '#server/db/connection';
 import { shares } from '#server/db/schema/shares';
 import { studies } from '#server/db/schema/studies';

@@ -1,5 +1,5 @@
 import { Router } from 'express';
-import { createShare, deleteShare, listShares } from '#shared/contracts/studies';
+import { createShare, deleteShare, listShares } from '#shared/contracts/shares';
 import type { Deps } from '#server/deps';
 import { bindFor } from '#server/http/bind';
 import { findShares } from '#server/shares/shares.repository';

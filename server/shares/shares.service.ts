@@ -1,4 +1,4 @@
-import type { Share } from '#shared/contracts/studies';
+import type { Share } from '#shared/contracts/shares';
 import { normaliseEmail } from '#server/accounts/email';
 import { randomSecret } from '#server/accounts/secrets';
 import type { Transaction } from '#server/db/connection';

@@ -20,14 +20,6 @@ export const deleteStudy = (studyId: string) => call(contract.deleteStudy, { par
 
 export const restoreStudy = (studyId: string) => call(contract.restoreStudy, { params: { studyId } });
 
-export const listShares = (studyId: string) => call(contract.listShares, { params: { studyId } });
-
-export const createShare = (studyId: string, body: BodyInputOf<typeof contract.createShare>) =>
-  call(contract.createShare, { params: { studyId }, body });
-
-export const deleteShare = (studyId: string, shareId: string) =>
-  call(contract.deleteShare, { params: { studyId, shareId } });
-
 export const readStudyFilters = () => call(contract.readStudyFilters, {});
 
 export const setStudyTags = (studyId: string, body: BodyInputOf<typeof contract.setStudyTags>) =>

@@ -1,9 +1,9 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/vue-query';
 import { computed, toValue, type MaybeRefOrGetter } from 'vue';
 import type { BodyOf } from '#shared/contracts/endpoint';
-import type { createShare as contract, Share } from '#shared/contracts/studies';
+import type { createShare as contract, Share } from '#shared/contracts/shares';
 import { ApiError } from '@/api/api-error';
-import { createShare, deleteShare, listShares } from '@/api/studies';
+import { createShare, deleteShare, listShares } from '@/api/shares';
 
 /** With whom a study is shared, asked for while the reader looks at it. */
 export function useShares(studyId: MaybeRefOrGetter<string | null>, isOpen: MaybeRefOrGetter<boolean>) {

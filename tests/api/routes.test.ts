@@ -6,6 +6,7 @@ import * as annotationEndpoints from '#shared/contracts/annotations';
 import * as demoEndpoints from '#shared/contracts/demo';
 import * as docsEndpoints from '#shared/contracts/docs';
 import * as measureEndpoints from '#shared/contracts/measures';
+import * as shareEndpoints from '#shared/contracts/shares';
 import * as shelfEndpoints from '#shared/contracts/shelf';
 import * as studyEndpoints from '#shared/contracts/studies';
 import * as versionEndpoints from '#shared/contracts/versions';
@@ -195,6 +196,7 @@ test('when a contract has a route, then it is in the lists above, and nothing el
     demoEndpoints,
     docsEndpoints,
     measureEndpoints,
+    shareEndpoints,
     shelfEndpoints,
     studyEndpoints,
     versionEndpoints,

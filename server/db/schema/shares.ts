@@ -1,5 +1,5 @@
 import { index, mysqlEnum, mysqlTable, uniqueIndex } from 'drizzle-orm/mysql-core';
-import { SHARE_RIGHTS } from '#shared/contracts/studies';
+import { SHARE_RIGHTS } from '#shared/contracts/shares';
 import { EMAIL_LENGTH, exactText, ID_LENGTH, idText, time } from '#server/db/columns';
 import { studies } from '#server/db/schema/studies';
 

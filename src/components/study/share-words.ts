@@ -1,4 +1,4 @@
-import type { Share } from '#shared/contracts/studies';
+import type { Share } from '#shared/contracts/shares';
 
 /** What a right means, in plain words. */
 export const SHARE_WORDS: Readonly<Record<Share['may'], string>> = {
