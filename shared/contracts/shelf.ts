@@ -17,7 +17,6 @@ export const shelvedChordSchema = z.strictObject({
   ensemble: ensembleSchema,
   limits: shape.limits,
 });
-export type ShelvedChord = z.infer<typeof shelvedChordSchema>;
 
 export const shelfVoicingSchema = z.object({
   id: z.string(),

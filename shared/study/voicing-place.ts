@@ -29,8 +29,3 @@ export function parsePlace(text: string): VoicingPlace | null {
   if (chordId === undefined) return null;
   return { studyId: studyId ?? null, number: number === undefined ? null : Number(number), chordId };
 }
-
-/** @returns whether two places are one */
-export function samePlace(a: VoicingPlace, b: VoicingPlace): boolean {
-  return placeText(a) === placeText(b);
-}

@@ -35,8 +35,6 @@ export interface BarLook {
   readonly textSize: number;
   /** The bar begins a line: it has clefs and signature. */
   readonly opens: boolean;
-  /** At least as wide as this. */
-  readonly atLeast?: number;
 }
 
 const BEFORE_FIRST = 16;
@@ -84,7 +82,7 @@ function beginningOf(plan: ScorePlan, bar: Bar, opens: boolean): number {
 }
 
 /** Left edges of the heads, and where the bar ends. */
-function placesOf(plan: ScorePlan, bar: Bar, { textSize, opens, atLeast = 0 }: BarLook) {
+function placesOf(plan: ScorePlan, bar: Bar, { textSize, opens }: BarLook) {
   const beginning = beginningOf(plan, bar, opens);
   const leads = bar.moments.map(({ staves }, index) => {
     const clef = newClefs(bar, index).some(Boolean) ? NEW_CLEF : 0;
@@ -94,7 +92,7 @@ function placesOf(plan: ScorePlan, bar: Bar, { textSize, opens, atLeast = 0 }: B
   const after = BEFORE_BAR_LINE + (bar.clefsAfter.some((clef) => clef !== null) ? NEW_CLEF : 0);
   const fixed = beginning + leads.reduce((sum, lead) => sum + lead, 0) + after;
   const free = trails.reduce((sum, trail) => sum + trail, 0);
-  const width = Math.max(fixed + free, atLeast, LEAST_BAR);
+  const width = Math.max(fixed + free, LEAST_BAR);
   const stretch = (width - fixed) / free;
   let at = beginning;
   const xs = leads.map((lead, index) => {
@@ -139,7 +137,7 @@ function spansOf(bar: Bar, xs: readonly number[], leads: readonly number[], widt
  * Lays out one bar: the same places for all five staves.
  * @param plan of the progression
  * @param bar of it
- * @param look size of words, whether it begins a line, least width
+ * @param look size of words, whether it begins a line
  * @returns the bar in tenths of a staff space
  */
 export function barSketch(plan: ScorePlan, bar: Bar, look: BarLook): BarSketch {

@@ -1,6 +1,6 @@
 import type { ScorePlan } from '#shared/notation/score-plan';
 import { barSketch, type BarSketch } from '@/engraving/bar-layout';
-import { lineTops } from '@/engraving/score-lines';
+import { lineTops } from '@/engraving/line-tops';
 
 /** A bar's place in the one long line that the reader scrolls. */
 export interface StripBar {

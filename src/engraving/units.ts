@@ -4,5 +4,3 @@ export const SPACE = 10;
 export const STAFF_HEIGHT = 4 * SPACE;
 /** Two steps of the scale are a staff space. */
 export const STEP = SPACE / 2;
-/** From the middle line to the outer ones, in steps. */
-export const OUTER_STEPS = 4;

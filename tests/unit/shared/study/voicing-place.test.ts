@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { parsePlace, placeText, samePlace } from '#shared/study/voicing-place';
+import { parsePlace, placeText } from '#shared/study/voicing-place';
 
 describe('where a voicing is kept', () => {
   it.each([
@@ -17,10 +17,4 @@ describe('where a voicing is kept', () => {
       expect(parsePlace(text)).toBeNull();
     },
   );
-
-  it('when the save differs, then the place is another', () => {
-    const place = { studyId: 'study-1', number: 1, chordId: 'chord-1' };
-    expect(samePlace(place, { ...place })).toBe(true);
-    expect(samePlace(place, { ...place, number: 2 })).toBe(false);
-  });
 });

@@ -5,7 +5,6 @@ import { newStudy } from '#shared/study/new-study';
 import { barSketch } from '@/engraving/bar-layout';
 import { beginningWidth } from '@/engraving/beginning';
 import { accidentalRoom } from '@/engraving/room-before';
-import { scoreLines } from '@/engraving/score-lines';
 import { barsWithin, scoreStrip } from '@/engraving/score-strip';
 import { staffPlaces } from '@/engraving/staff-places';
 import { systemSketch } from '@/engraving/system-sketch';
@@ -75,16 +74,6 @@ describe('the score', () => {
     expect(sketch.width).toBeGreaterThan(second?.x ?? Infinity);
     expect(sketch.spans.map(({ chordId }) => chordId)).toEqual(['chord-0', 'chord-1']);
     expect(sketch.titles.map(({ text }) => text)).toEqual(['1', '2']);
-  });
-
-  it('when it is broken into lines, then each bar is in one and every full line has the width', () => {
-    const lines = scoreLines(plan, { width: 1200, textSize: 16, titles: 30 });
-    expect(lines.flatMap(({ bars }) => bars.map(({ number }) => number))).toEqual(
-      Array.from({ length: 200 }, (_, index) => index + 1),
-    );
-    for (const { bars } of lines.slice(0, -1)) {
-      expect(bars.reduce((sum, { width }) => sum + width, 0)).toBeCloseTo(1200, 6);
-    }
   });
 
   it('when two hundred chords are scrolled through, then only those near the window are drawn', () => {
