@@ -4,6 +4,7 @@ import type { ResponseOf } from '#shared/contracts/endpoint';
 import type { listDeletedStudies as contract } from '#shared/contracts/studies';
 import { ApiError } from '@/api/api-error';
 import { listDeletedStudies, restoreStudy } from '@/api/studies';
+import { STUDIES_KEY } from '@/composables/study-changes';
 
 type Page = ResponseOf<typeof contract>;
 export type DeletedStudy = Page['studies'][number];
@@ -12,7 +13,7 @@ export type DeletedStudy = Page['studies'][number];
 export function useDeletedStudies() {
   const client = useQueryClient();
   const query = useInfiniteQuery({
-    queryKey: ['studies', 'deleted'],
+    queryKey: [...STUDIES_KEY, 'deleted'],
     queryFn: ({ pageParam }) => listDeletedStudies({ after: pageParam }),
     initialPageParam: undefined as string | undefined,
     getNextPageParam: (last: Page) => last.next ?? undefined,
@@ -26,6 +27,6 @@ export function useDeletedStudies() {
     more: () => void query.fetchNextPage(),
     again: () => void query.refetch(),
     restore: (studyId: string) =>
-      restoreStudy(studyId).then(() => client.invalidateQueries({ queryKey: ['studies'] })),
+      restoreStudy(studyId).then(() => client.invalidateQueries({ queryKey: STUDIES_KEY })),
   };
 }
