@@ -55,12 +55,15 @@ export function useCompareAddress(): void {
     compare.clear();
     if (route.query[NAMES.held] === undefined) return;
     reading = true;
-    const { held, now, beside, whole } = await readAddress(route.query, sources);
-    if (now) taking.bring(now);
-    compare.hold(held);
-    compare.add(beside);
-    reading = false;
-    if (!whole) notice(GONE);
+    try {
+      const { held, now, beside, whole } = await readAddress(route.query, sources);
+      if (now) taking.bring(now);
+      compare.hold(held);
+      compare.add(beside);
+      if (!whole) notice(GONE);
+    } finally {
+      reading = false;
+    }
   }
 
   watch(
