@@ -35,32 +35,18 @@ export const useStudyStore = defineStore('study', () => {
     forgetWorkOfOthers(desk.works, accountId);
   }
 
-  const {
-    study,
-    status,
-    problem,
-    conflict,
-    merged,
-    keptInBrowser,
-    maySave,
-    hasUnsaved,
-    saveState,
-    saveProblem,
-  } = desk;
   return {
-    ...{
-      study,
-      status,
-      problem,
-      conflict,
-      merged,
-      keptInBrowser,
-      maySave,
-      hasUnsaved,
-      saveState,
-      saveProblem,
-      may,
-    },
+    study: desk.study,
+    status: desk.status,
+    problem: desk.problem,
+    conflict: desk.conflict,
+    merged: desk.merged,
+    keptInBrowser: desk.keptInBrowser,
+    maySave: desk.maySave,
+    hasUnsaved: desk.hasUnsaved,
+    saveState: desk.saveState,
+    saveProblem: desk.saveProblem,
+    may,
     open: (studyId: string) => open(desk, studyId),
     openDraft: () => openDraft(desk),
     save: () => flush(desk),

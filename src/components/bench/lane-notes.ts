@@ -26,7 +26,8 @@ export interface LaneNote {
   readonly left: number;
 }
 
-interface Shown {
+/** A chord, and what its lanes are drawn by. */
+export interface ShownChord {
   readonly chord: Chord;
   readonly analysis: ChordAnalysis;
   readonly ensemble: Ensemble;
@@ -73,7 +74,7 @@ function spokenOf(voice: Voice, hertz: string, beyond: boolean, naming: NoteNami
  * @param laneWidth in pixels; 0 while it is not known
  */
 export function laneNotes(
-  { chord, analysis, ensemble, spelling, naming, axis }: Shown,
+  { chord, analysis, ensemble, spelling, naming, axis }: ShownChord,
   laneWidth = 0,
 ): readonly LaneNote[] {
   const apart = TOKEN_HEIGHT / axis.semitone;

@@ -1,11 +1,6 @@
-import type { NoteNaming } from '#shared/pitch/display';
-import type { SpellingKey } from '#shared/pitch/spelling';
 import type { Section } from '#shared/strings/sections';
-import type { Chord, Ensemble } from '#shared/study/study.document';
-import type { ChordAnalysis } from '#shared/voicing/analysis';
 import { compareVoicings, type NoteChange } from '#shared/voicing/comparison';
-import type { PitchAxis } from '@/charts/pitch-axis';
-import { laneNotes, type LaneNote } from '@/components/bench/lane-notes';
+import { laneNotes, type LaneNote, type ShownChord } from '@/components/bench/lane-notes';
 import type { HeldVoicing } from '@/components/compare/held-voicing';
 
 /** A note of the held voicing that is not where it was: gone for good, or moved away. */
@@ -44,14 +39,8 @@ export interface HeldMarks {
   readonly motions: readonly Motion[];
 }
 
-interface Shown {
+interface Shown extends ShownChord {
   readonly held: HeldVoicing;
-  readonly chord: Chord;
-  readonly analysis: ChordAnalysis;
-  readonly ensemble: Ensemble;
-  readonly spelling: SpellingKey;
-  readonly naming: NoteNaming;
-  readonly axis: PitchAxis;
 }
 
 /** Half the height of a token with its ring, in pixels: lines end where it begins. */
