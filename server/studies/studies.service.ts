@@ -1,4 +1,5 @@
 import type { Study } from '#shared/contracts/studies';
+import { shortened } from '#shared/study/shortened';
 import { MAX_TITLE, type StudyDocument } from '#shared/study/study.document';
 import { randomSecret } from '#server/accounts/secrets';
 import type { Transaction } from '#server/db/connection';
@@ -49,13 +50,6 @@ export async function makeStudy(
 
 const COPY = ' (copy)';
 
-/** Cuts between characters: half of one could not be kept. */
-function titleOfCopy(title: string): string {
-  const characters = Array.from(title);
-  while ((characters.join('') + COPY).length > MAX_TITLE) characters.pop();
-  return characters.join('') + COPY;
-}
-
 /** Makes a study of the viewer's own like one that they may read; asked again, it is still one. */
 export async function duplicate(
   deps: Pick<Deps, 'db' | 'clock' | 'summaries'>,
@@ -67,7 +61,7 @@ export async function duplicate(
   const made = await findStudyIdByKey(deps.db, viewer.id, requestKey);
   if (made !== null) return findStudy(deps.db, viewer, made, 1);
   return makeStudy(deps, viewer, {
-    document: { ...document, title: titleOfCopy(document.title) },
+    document: { ...document, title: shortened(document.title, MAX_TITLE - COPY.length) + COPY },
     requestKey,
   });
 }

@@ -10,6 +10,7 @@ export const STUDY_SCHEMA_VERSION = 1;
 export const MAX_CHORDS = 200;
 export const MAX_VOICES = 40;
 export const MAX_TITLE = 120;
+export const MAX_CHORD_NAME = 40;
 
 export const CONTACTS = ['ordinary', 'sulTasto', 'sulPonticello'] as const;
 export const STROKES = ['sustained', 'tremolo', 'pizzicato'] as const;
@@ -82,7 +83,7 @@ export type Voice = z.infer<typeof voiceSchema>;
 
 export const chordSchema = z.strictObject({
   id: idSchema,
-  name: z.string().trim().max(40).nullable().default(null),
+  name: z.string().trim().max(MAX_CHORD_NAME).nullable().default(null),
   beats: z.number().min(0.25).max(64).default(4),
   dynamic: z.enum(DYNAMICS).default('mf'),
   voices: z

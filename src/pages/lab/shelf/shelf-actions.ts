@@ -2,8 +2,9 @@ import { reactive, ref } from 'vue';
 import type { ShelfVoicing } from '#shared/contracts/shelf';
 import { keyName } from '#shared/study/about-study';
 import { fitChord } from '#shared/study/shelved';
+import { shortened } from '#shared/study/shortened';
 import { addChordAfter } from '#shared/study/study.changes';
-import { MAX_CHORDS, type Chord } from '#shared/study/study.document';
+import { MAX_CHORD_NAME, MAX_CHORDS, type Chord } from '#shared/study/study.document';
 import { ApiError } from '@/api/api-error';
 import { newRequestKey } from '@/api/request-key';
 import { notice } from '@/composables/notices';
@@ -55,7 +56,7 @@ export function useShelfActions(shelf: ReturnType<typeof useShelf>) {
     if (!fitted) failed.value = 'There it would leave the strings’ compass: choose another octave.';
     else if (bench.study.chords.length >= MAX_CHORDS)
       failed.value = `A study has at most ${MAX_CHORDS} chords.`;
-    else putIn({ ...fitted, name: kept.name.slice(0, NAME_LENGTH).trim() }, kept.name);
+    else putIn({ ...fitted, name: shortened(kept.name, MAX_CHORD_NAME).trim() }, kept.name);
   }
 
   function putIn(chord: Chord, called: string): void {
@@ -82,6 +83,3 @@ export function useShelfActions(shelf: ReturnType<typeof useShelf>) {
 
   return { bench, store, name, key, octaves, failed, keeping, keep, use, rename, remove };
 }
-
-/** Of a chord in a study. */
-const NAME_LENGTH = 40;
