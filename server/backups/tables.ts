@@ -41,9 +41,20 @@ export async function readTables(connection: Connection): Promise<TableState[]> 
   return states;
 }
 
-/** @throws {Error} if a kept study cannot be read as one. */
+/**
+ * Reads study after study, so that no more than one study's saves are held at once.
+ * @returns how many saves there are
+ * @throws {Error} if a kept study cannot be read as one
+ */
 export async function readEveryStudy(connection: Connection): Promise<number> {
-  const [rows] = await connection.query<RowDataPacket[]>('SELECT document FROM saves');
-  for (const { document } of rows) readDocument(document);
-  return rows.length;
+  const [studies] = await connection.query<RowDataPacket[]>('SELECT id FROM studies');
+  let read = 0;
+  for (const { id } of studies) {
+    const [saves] = await connection.query<RowDataPacket[]>('SELECT document FROM saves WHERE study_id = ?', [
+      id,
+    ]);
+    for (const { document } of saves) readDocument(document);
+    read += saves.length;
+  }
+  return read;
 }
