@@ -1,9 +1,9 @@
 import { computed, type ComputedRef } from 'vue';
 import type { NotatedStudy } from '#shared/notation/system-plan';
 import { useEngraver } from '@/composables/engraver';
-import { chordFigure, figureAxis } from '@/export/figure/figure';
+import { chordFigure } from '@/export/figure/figure';
 import type { FigureInput } from '@/export/figure/figure-input';
-import { drawStaves } from '@/export/figure/staves';
+import { figureStaves } from '@/export/figure/figure-staves';
 import type { SvgNode } from '@/export/svg/nodes';
 
 export type FigureSource = Omit<FigureInput, 'staves' | 'ensemble'> & { readonly study: NotatedStudy };
@@ -15,15 +15,7 @@ export function useChordFigure(source: () => FigureSource): {
   readonly ready: ComputedRef<boolean>;
 } {
   const { engraver, failed } = useEngraver(() => source().layout.panes.system !== undefined);
-  const staves = computed(() => {
-    const { layout, chord, study, naming, palette } = source();
-    const room = layout.panes.system;
-    if (!engraver.value || !room) return [];
-    const axis = figureAxis(chord, layout);
-    return drawStaves(engraver.value, {
-      ...{ chord, study, naming, axis, room, palette, text: layout.text * 0.8, leaders: true },
-    });
-  });
+  const staves = computed(() => (engraver.value ? figureStaves(engraver.value, source()) : []));
   const figure = computed(() => {
     const { study, ...input } = source();
     return chordFigure({ ...input, ensemble: study.ensemble, staves: staves.value });

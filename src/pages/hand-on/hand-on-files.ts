@@ -6,9 +6,9 @@ import { loadEngraver } from '@/engraving/engraver';
 import { inlinedFonts } from '@/engraving/inlined-fonts';
 import { csvOf, type Table } from '@/export/csv';
 import { handOut } from '@/export/download';
-import { chordFigure, figureAxis } from '@/export/figure/figure';
+import { chordFigure } from '@/export/figure/figure';
+import { figureStaves } from '@/export/figure/figure-staves';
 import { SHEET_LAYOUT } from '@/export/figure/sheet-layout';
-import { drawStaves } from '@/export/figure/staves';
 import { fileName } from '@/export/file-names';
 import { PAPER_PALETTE } from '@/export/palette';
 import { pngOf, standAloneSvg } from '@/export/picture';
@@ -24,8 +24,6 @@ export interface HandedOn {
 }
 
 const ALL = { overtones: true, figures: true };
-/** Words of the staves to those of the figure. */
-const STAFF_TEXT = 0.8;
 
 function nameOf({ study, chord }: HandedOn): string {
   return chord.name ?? `Chord ${study.chords.indexOf(chord) + 1}`;
@@ -35,15 +33,8 @@ async function svgOf(handed: HandedOn): Promise<string> {
   const { study, chord, naming } = handed;
   const engraver = await loadEngraver();
   const layout = SHEET_LAYOUT;
-  const { system } = layout.panes;
   const palette = PAPER_PALETTE;
-  const axis = figureAxis(chord, layout);
-  const staves = system
-    ? drawStaves(engraver, {
-        ...{ chord, study, naming, axis, room: system, palette },
-        ...{ text: layout.text * STAFF_TEXT, leaders: true },
-      })
-    : [];
+  const staves = figureStaves(engraver, { layout, chord, study, naming, palette });
   const figure = chordFigure({
     ...{ chord, analysis: analysisOf(chord, study), ensemble: study.ensemble, a4Hz: study.a4Hz },
     ...{ naming, palette, layout, staves, shown: ALL },
