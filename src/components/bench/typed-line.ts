@@ -65,10 +65,12 @@ export function useTypedLine(
     typing.value = null;
   }
 
-  function giveUp(): void {
-    if (typing.value === null) return;
+  /** @returns whether there was anything to give up */
+  function giveUp(): boolean {
+    if (typing.value === null) return false;
     listener.cancel();
     typing.value = null;
+    return true;
   }
 
   function goTo({ start, end }: TypingFault): void {

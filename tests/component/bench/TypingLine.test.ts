@@ -96,6 +96,14 @@ describe('the typing line', () => {
     await field.trigger('keydown', { key: 'Escape' });
     expect(wrapper.emitted('cancel')).toHaveLength(1);
     expect(field.element.value).toBe('Vc A2');
+    expect(wrapper.emitted('leave')).toBeUndefined();
+  });
+
+  it('when Escape is pressed in a line as it is, then it is left', async () => {
+    const { wrapper, field } = lineOf('Vc A2');
+    await field.trigger('keydown', { key: 'Escape' });
+    expect(wrapper.emitted('leave')).toHaveLength(1);
+    expect(wrapper.emitted('cancel')).toBeUndefined();
   });
 
   it('when everything is deleted and Enter pressed, then the chord is emptied', async () => {
