@@ -177,7 +177,7 @@ test('when a chord is held in the room and silenced, then the room falls silent 
 }) => {
   await typeNotes(page, 'Va A3, Vn1 E5');
   await page.getByRole('button', { name: /^Sound:/ }).click();
-  await page.getByRole('switch', { name: 'Room' }).click();
+  await page.getByRole('switch', { name: 'Hall' }).click();
   await page.keyboard.press('Escape');
   await hold(page);
   await rewind(page);
