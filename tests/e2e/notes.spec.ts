@@ -5,6 +5,17 @@ const line = (page: Page) => page.getByLabel('Notes', { exact: true });
 const note = (page: Page, name: string) => page.getByRole('slider', { name, exact: true });
 const hand = (page: Page) => page.getByRole('group', { name: /selected note/ });
 
+/** The choices of how a note is played are seen as soon as their menu is open: nothing has to be scrolled. */
+async function expectAllInSight(page: Page) {
+  const menu = page.getByRole('dialog', { name: 'How it is played' });
+  const choices = ['Contact', 'Muted (con sordino)', 'Stroke', 'Harmonic', 'Dynamic'];
+  for (const label of choices) {
+    const choice = menu.getByLabel(label, { exact: true });
+    await expect(choice).toBeInViewport({ ratio: 1 });
+    await choice.click({ trial: true });
+  }
+}
+
 test('by mouse, notes are dragged, played otherwise, selected together, copied and transposed', async ({
   page,
 }) => {
@@ -27,6 +38,7 @@ test('by mouse, notes are dragged, played otherwise, selected together, copied a
 
   await note(page, 'A2').click();
   await page.getByRole('button', { name: /How it is played/ }).click();
+  await expectAllInSight(page);
   await page.getByLabel('Dynamic', { exact: true }).selectOption('pp');
   await page.getByRole('button', { name: 'Solo', exact: true }).click();
   await expect(line(page)).toHaveValue('DB D2, Vc A2[solo pp] F3');
@@ -94,6 +106,7 @@ test.describe('by touch', () => {
     await hand(page).getByRole('button', { name: 'Semitone up' }).tap();
     await expect(line(page)).toHaveValue('Va A♭3');
     await page.getByRole('button', { name: /How it is played/ }).tap();
+    await expectAllInSight(page);
     await page.getByLabel('Muted (con sordino)').tap();
     await expect(line(page)).toHaveValue('Va A♭3[muted]');
   });
