@@ -102,7 +102,8 @@ test.each([
   ['a limit of 51', '?limit=51', 'query.limit'],
   ['a limit that is no number', '?limit=many', 'query.limit'],
   ['a place that is none', '?after=here', 'query.after'],
-  ['an unknown parameter', '?order=title', 'query'],
+  ['an order that is none', '?order=upwards', 'query.order'],
+  ['an unknown parameter', '?colour=blue', 'query'],
 ])('when the list is asked for with %s, then the parameter is named', async (_what, query, path) => {
   const at = await createTestApp();
   const ada = await enter(at);
