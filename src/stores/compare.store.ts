@@ -2,12 +2,14 @@ import { defineStore } from 'pinia';
 import { computed, ref, shallowRef } from 'vue';
 import { voicingsOf, type Voicing } from '#shared/study/voicing';
 import { useBenchStore } from '@/stores/bench.store';
+import { chordBefore } from '@/stores/chord-before';
 
 /** What stands under the bench while two voicings are compared. */
 export type CompareView = 'comparison' | 'beside' | 'findings';
 
 /** As many small profiles as stand side by side. */
 export const MOST_BESIDE = 8;
+const BEFORE_CHANGES = 'as it was before your changes';
 
 /** Two voicings beside each other: one is held, the other lies on the bench, or is brought from elsewhere. */
 export const useCompareStore = defineStore('compare', () => {
@@ -42,6 +44,18 @@ export const useCompareStore = defineStore('compare', () => {
     view.value = 'comparison';
   }
 
+  /** Holds the chord on the bench as it was before its latest changes, or as it is where it has none. */
+  function begin(): void {
+    bench.endGesture();
+    const [past, present, { chordId }] = [bench.history.past, bench.study, bench];
+    const before = guest.value ? null : chordBefore({ past, present, chordId });
+    if (!before || !onBench.value) holdNow();
+    else {
+      hold({ ...onBench.value, chord: before, from: BEFORE_CHANGES });
+      view.value = 'comparison';
+    }
+  }
+
   /** Takes B from elsewhere; with nothing it is the chord on the bench again. */
   function bring(voicing: Voicing | null): void {
     guest.value = voicing;
@@ -62,10 +76,14 @@ export const useCompareStore = defineStore('compare', () => {
   }
 
   const comparing = computed(() => held.value !== null);
+  /** A is what the chord on the bench was before its changes, not what it was when Compare was pressed. */
+  const heldBefore = computed(
+    () => held.value?.from === BEFORE_CHANGES && now.value?.chord.id === held.value.chord.id,
+  );
   /** What clouds in the chord on the bench is told where that chord lies in view. */
   const tellsFindings = computed(
     () => !comparing.value || (view.value === 'findings' && guest.value === null),
   );
-  const state = { held, guest, beside, view, now, onBench, comparing, tellsFindings };
-  return { ...state, hold, holdNow, bring, add, remove, clear };
+  const state = { held, guest, beside, view, now, onBench, comparing, heldBefore, tellsFindings };
+  return { ...state, hold, holdNow, begin, bring, add, remove, clear };
 });

@@ -64,6 +64,11 @@ test('when two chords of the progression are compared, then the address opens th
   await page.getByRole('button', { name: 'Add a chord like this one' }).click();
   await typeNotes(page, OPEN);
   await page.getByRole('button', { name: 'Compare', exact: true }).click();
+  // The second was a copy of the first before it was changed.
+  await expect(head(page)).toContainText('as it was before your changes');
+  await expect(foot(page)).toContainText('B is clearer than A.');
+  await foot(page).getByRole('button', { name: 'Hold it as it is now' }).click();
+  await expect(head(page)).toContainText('as it was when held');
   await page.locator('[data-chord]').first().click();
   await expect(foot(page)).toContainText('B is more clouded than A.');
   await expect(page).toHaveURL(/[?&]a=[^&]+&b=/);

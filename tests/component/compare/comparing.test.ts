@@ -39,6 +39,32 @@ describe('what is held', () => {
     expect(pitches()).toEqual(['A2', 'C3']);
   });
 
+  it('when the chord has been changed before, then A is what it was, and what it is now can be held instead', () => {
+    const { put } = atTheDesk();
+    put('A2');
+    put('C3');
+    put('E3');
+    const compare = useCompareStore();
+    compare.begin();
+    const pitches = () => [compare.held, compare.now].map((side) => side?.chord.voices[0]?.pitch);
+    expect(pitches()).toEqual(['A2', 'E3']);
+    expect(compare.held?.from).toBe('as it was before your changes');
+    expect(compare.heldBefore).toBe(true);
+    compare.holdNow();
+    expect(pitches()).toEqual(['E3', 'E3']);
+    expect(compare.heldBefore).toBe(false);
+  });
+
+  it('when the chord has only been written, then A is what it is', () => {
+    const { put } = atTheDesk();
+    put('A2');
+    put('A2', 'E3');
+    const compare = useCompareStore();
+    compare.begin();
+    expect(compare.held?.chord.voices.map(({ pitch }) => pitch)).toEqual(['A2', 'E3']);
+    expect(compare.held?.from).toBe('as it was when held');
+  });
+
   it('when B comes from another study, then it is looked at, and taken into the progression as a chord of its own', () => {
     const { bench, put } = atTheDesk();
     put('A2');
@@ -237,7 +263,7 @@ describe('the comparison in words and figures', () => {
         sides,
         comparison: compareVoicings(sides.held.analysis, sides.now.analysis),
         figures: [{ name: 'Spread', held: '3 semitones', now: '12 semitones' }],
-        ...{ naming: 'english', backLabel: null },
+        ...{ naming: 'english', backLabel: null, before: false },
       },
       global: { stubs },
     });

@@ -37,7 +37,7 @@ export function useBenchTaking(
   function restore({ chord }: Voicing): void {
     bench.selectChord(chord.id);
     bench.change(changeChord(bench.study, chord.id, () => chord));
-    notice('The chord is as it was when it was held.', undo);
+    notice('The chord is as A has it.', undo);
   }
 
   function insert({ chord, name }: Voicing): void {
