@@ -98,6 +98,18 @@ describe('the muddiness bars', () => {
     const ys = registerBars(analysisOf(chordOf('Vc A2')), axis).map(({ y }) => y);
     expect(ys).toEqual([...ys].sort((a, b) => b - a));
   });
+
+  it('when the lowest register only just shows, then its bar ends at the foot and none covers another’s name', () => {
+    const analysis = analysisOf(chordOf('DB B0'), {
+      registers: { subcontra: { index: 80, at: 23 }, contra: { index: 85, at: 26 } },
+    });
+    const [bar, name] = [20, 15];
+    const bars = registerBars(analysis, pitchAxis([23], 320, 40), { bar, name });
+    const ys = bars.map(({ y }) => y);
+    expect(bars[0]?.register).toBe('subcontra');
+    expect(ys[0]).toBe(320 - bar / 2);
+    ys.slice(1).forEach((y, index) => expect((ys[index] ?? 0) - y).toBeGreaterThanOrEqual(bar + name));
+  });
 });
 
 describe('the spacing brackets', () => {
