@@ -1,15 +1,29 @@
 import { defineStore } from 'pinia';
-import { computed, ref, shallowRef } from 'vue';
+import { computed, shallowRef } from 'vue';
+import { same } from '#shared/study/same';
 import { voicingsOf, type Voicing } from '#shared/study/voicing';
 import { useBenchStore } from '@/stores/bench.store';
 import { chordBefore } from '@/stores/chord-before';
-
-/** What stands under the bench while two voicings are compared. */
-export type CompareView = 'comparison' | 'beside' | 'findings';
+import { useCompareView } from '@/stores/compare-view';
 
 /** As many small profiles as stand side by side. */
 export const MOST_BESIDE = 8;
 const BEFORE_CHANGES = 'as it was before your changes';
+
+/** Several voicings side by side. */
+function useBeside() {
+  const beside = shallowRef<readonly Voicing[]>([]);
+
+  function add(voicings: readonly Voicing[]): void {
+    beside.value = [...beside.value, ...voicings].slice(0, MOST_BESIDE);
+  }
+
+  function remove(voicing: Voicing): void {
+    beside.value = beside.value.filter((other) => other !== voicing);
+  }
+
+  return { beside, add, remove };
+}
 
 /** Two voicings beside each other: one is held, the other lies on the bench, or is brought from elsewhere. */
 export const useCompareStore = defineStore('compare', () => {
@@ -18,8 +32,7 @@ export const useCompareStore = defineStore('compare', () => {
   const held = shallowRef<Voicing | null>(null);
   /** B, where it is not the chord on the bench: only looked at. */
   const guest = shallowRef<Voicing | null>(null);
-  const beside = shallowRef<readonly Voicing[]>([]);
-  const view = ref<CompareView>('comparison');
+  const { beside, ...stood } = useBeside();
 
   const onBench = computed(
     () =>
@@ -30,7 +43,12 @@ export const useCompareStore = defineStore('compare', () => {
   /** B. */
   const now = computed(() => guest.value ?? onBench.value);
 
+  const { view, show, showUntilChanged } = useCompareView(
+    () => !same(held.value?.chord.voices, now.value?.chord.voices),
+  );
+
   function hold(voicing: Voicing | null): void {
+    if (held.value === null || voicing === null) show('comparison');
     held.value = voicing;
     if (voicing === null) guest.value = null;
   }
@@ -41,7 +59,7 @@ export const useCompareStore = defineStore('compare', () => {
     bench.endGesture();
     hold({ ...now.value, from: guest.value ? now.value.from : 'as it was when held' });
     guest.value = null;
-    view.value = 'comparison';
+    show('comparison');
   }
 
   /** Holds the chord on the bench as it was before its latest changes, or as it is where it has none. */
@@ -49,30 +67,23 @@ export const useCompareStore = defineStore('compare', () => {
     bench.endGesture();
     const [past, present, { chordId }] = [bench.history.past, bench.study, bench];
     const before = guest.value ? null : chordBefore({ past, present, chordId });
-    if (!before || !onBench.value) holdNow();
+    if (before && onBench.value) hold({ ...onBench.value, chord: before, from: BEFORE_CHANGES });
     else {
-      hold({ ...onBench.value, chord: before, from: BEFORE_CHANGES });
-      view.value = 'comparison';
+      holdNow();
+      if (!bench.readOnly) showUntilChanged('findings');
     }
   }
 
   /** Takes B from elsewhere; with nothing it is the chord on the bench again. */
   function bring(voicing: Voicing | null): void {
     guest.value = voicing;
-  }
-
-  function add(voicings: readonly Voicing[]): void {
-    beside.value = [...beside.value, ...voicings].slice(0, MOST_BESIDE);
-  }
-
-  function remove(voicing: Voicing): void {
-    beside.value = beside.value.filter((other) => other !== voicing);
+    // Its findings are not told: it does not lie on the bench.
+    if (voicing && view.value === 'findings') show('comparison');
   }
 
   function clear(): void {
     hold(null);
     beside.value = [];
-    view.value = 'comparison';
   }
 
   const comparing = computed(() => held.value !== null);
@@ -85,5 +96,5 @@ export const useCompareStore = defineStore('compare', () => {
     () => !comparing.value || (view.value === 'findings' && guest.value === null),
   );
   const state = { held, guest, beside, view, now, onBench, comparing, heldBefore, tellsFindings };
-  return { ...state, hold, holdNow, begin, bring, add, remove, clear };
+  return { ...state, hold, holdNow, begin, show, bring, ...stood, clear };
 });

@@ -65,6 +65,37 @@ describe('what is held', () => {
     expect(compare.held?.from).toBe('as it was when held');
   });
 
+  it('when nothing differs yet, then what would help stays in view until something does, and no longer', () => {
+    const { put, bench } = atTheDesk();
+    put('A2');
+    const compare = useCompareStore();
+    compare.begin();
+    expect([compare.view, compare.tellsFindings]).toEqual(['findings', true]);
+    put('C3');
+    expect([compare.view, compare.tellsFindings]).toEqual(['comparison', false]);
+    bench.undo();
+    expect(compare.view).toBe('comparison');
+  });
+
+  it('when something else was asked for meanwhile, then a change leaves that in view', () => {
+    const { put } = atTheDesk();
+    put('A2');
+    const compare = useCompareStore();
+    compare.begin();
+    compare.show('beside');
+    put('C3');
+    expect(compare.view).toBe('beside');
+  });
+
+  it('when the study is only to be read, then nothing will be tried, and A and B are told at once', () => {
+    const { put, bench } = atTheDesk();
+    put('A2');
+    bench.readOnly = true;
+    const compare = useCompareStore();
+    compare.begin();
+    expect(compare.view).toBe('comparison');
+  });
+
   it('when B comes from another study, then it is looked at, and taken into the progression as a chord of its own', () => {
     const { bench, put } = atTheDesk();
     put('A2');
