@@ -7,6 +7,7 @@ import type { ChordAnalysis, VoiceSound } from '#shared/voicing/analysis';
 import { reachOf } from '#shared/voicing/reach.sentences';
 import { hertzText } from '#shared/voicing/words';
 import type { PitchAxis } from '@/charts/pitch-axis';
+import { spreadLabels } from '@/charts/spread-labels';
 import { tokenColumns, type TokenColumn } from '@/charts/token-columns';
 
 /** A note as it stands in the lanes. */
@@ -22,6 +23,8 @@ export interface LaneNote {
   readonly beyond: boolean;
   /** Pixels from the top. */
   readonly y: number;
+  /** Where its token is drawn: at `y`, or where tokens would cover each other as near to it as can be. */
+  readonly shownY: number;
   /** Middle, in per cent of all five lanes. */
   readonly left: number;
 }
@@ -42,6 +45,10 @@ const TOKEN_HEIGHT = 24;
 const TOKEN_HALF = 26;
 /** The same where notes stand beside each other and take less room. */
 const TIGHT_HALF = 23;
+/** Width of a note and its sign where they take less room, in pixels. */
+const TIGHT_WIDTH = 38;
+/** In a lane narrower than this, in pixels, two tokens beside each other would cover each other. */
+const NARROW_LANE = 2 * TIGHT_HALF + TIGHT_WIDTH;
 const MIDDLE = 1 / 2;
 const LANE_PERCENT = 100 / SECTIONS.length;
 
@@ -69,6 +76,34 @@ function spokenOf(voice: Voice, hertz: string, beyond: boolean, naming: NoteNami
   return parts.filter((part) => part !== '').join(', ');
 }
 
+interface Place extends TokenColumn {
+  readonly tight: boolean;
+  readonly shownY: number;
+}
+
+/** Where the tokens of one lane stand: those too close beside each other, or in a narrow lane over each other. */
+function placesIn(own: readonly Voice[], axis: PitchAxis, laneWidth: number): ReadonlyMap<string, Place> {
+  const notes = own.map(({ id, pitch }) => ({ id, midi: midiOfName(pitch) }));
+  const columns = tokenColumns(notes, TOKEN_HEIGHT / axis.semitone);
+  const over = laneWidth > 0 && laneWidth < NARROW_LANE;
+  const within = notes.filter(({ midi }) => midi >= axis.low && midi <= axis.high);
+  const spread = spreadLabels(
+    within.map(({ midi }) => axis.yOf(midi)),
+    TOKEN_HEIGHT,
+    { top: axis.strip, bottom: axis.height },
+  );
+  const spreadY = new Map(within.map(({ id }, index) => [id, spread[index]]));
+  return new Map(
+    notes.map(({ id, midi }): [string, Place] => {
+      const { column, columns: all } = columns.get(id) ?? { column: 0, columns: 1 };
+      const y = axis.yOf(midi);
+      return over
+        ? [id, { column: 0, columns: 1, tight: all > 1, shownY: spreadY.get(id) ?? y }]
+        : [id, { column, columns: all, tight: all > 1, shownY: y }];
+    }),
+  );
+}
+
 /**
  * Places the notes of a chord in the five lanes, in the chord's own order.
  * @param laneWidth in pixels; 0 while it is not known
@@ -77,22 +112,18 @@ export function laneNotes(
   { chord, analysis, ensemble, spelling, naming, axis }: ShownChord,
   laneWidth = 0,
 ): readonly LaneNote[] {
-  const apart = TOKEN_HEIGHT / axis.semitone;
-  const columns = new Map<string, TokenColumn>();
+  const places = new Map<string, Place>();
   for (const section of SECTIONS) {
     const own = chord.voices.filter((voice) => voice.section === section);
-    const placed = tokenColumns(
-      own.map(({ id, pitch }) => ({ id, midi: midiOfName(pitch) })),
-      apart,
-    );
-    for (const [id, column] of placed) columns.set(id, column);
+    for (const [id, place] of placesIn(own, axis, laneWidth)) places.set(id, place);
   }
   const sounds = new Map(analysis.voices.map((sound) => [sound.id, sound]));
   return chord.voices.map((voice) => {
     const midi = midiOfName(voice.pitch);
     const frequencyHz = fundamental(sounds.get(voice.id));
     const hertz = frequencyHz === null ? '' : hertzText(frequencyHz);
-    const place = columns.get(voice.id) ?? { column: 0, columns: 1 };
+    const y = axis.yOf(midi);
+    const place = places.get(voice.id) ?? { column: 0, columns: 1, tight: false, shownY: y };
     const beyond = reachOf(voice, ensemble.bass, spelling, naming).lying === 'beyond';
     return {
       voice,
@@ -100,9 +131,10 @@ export function laneNotes(
       name: displayPitch(voice.pitch, naming),
       spoken: spokenOf(voice, hertz, beyond, naming),
       frequencyHz,
-      tight: place.columns > 1,
+      tight: place.tight,
       beyond,
-      y: axis.yOf(midi),
+      y,
+      shownY: place.shownY,
       left: leftOf(voice.section, place, laneWidth),
     };
   });
