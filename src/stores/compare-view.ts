@@ -9,6 +9,8 @@ export type CompareView = 'comparison' | 'beside' | 'findings';
  */
 export function useCompareView(differs: () => boolean) {
   const view = ref<CompareView>('comparison');
+  /** What had the focus has been taken away: the comparison's heading is to have it. */
+  const headingAsked = ref(false);
   /** A and B are the same yet: what would help lies open until something of it is tried. */
   let awaitsChange = false;
 
@@ -24,5 +26,5 @@ export function useCompareView(differs: () => boolean) {
 
   // At once, so that the page changes but once.
   watch(differs, (they) => they && awaitsChange && show('comparison'), { flush: 'sync' });
-  return { view, show, showUntilChanged };
+  return { view, headingAsked, show, showUntilChanged };
 }

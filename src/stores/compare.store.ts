@@ -43,7 +43,7 @@ export const useCompareStore = defineStore('compare', () => {
   /** B. */
   const now = computed(() => guest.value ?? onBench.value);
 
-  const { view, show, showUntilChanged } = useCompareView(
+  const { view, headingAsked, show, showUntilChanged } = useCompareView(
     () => !same(held.value?.chord.voices, now.value?.chord.voices),
   );
 
@@ -95,6 +95,7 @@ export const useCompareStore = defineStore('compare', () => {
   const tellsFindings = computed(
     () => !comparing.value || (view.value === 'findings' && guest.value === null),
   );
-  const state = { held, guest, beside, view, now, onBench, comparing, heldBefore, tellsFindings };
+  const sides = { held, guest, now, onBench, comparing, heldBefore };
+  const state = { ...sides, beside, view, headingAsked, tellsFindings };
   return { ...state, hold, holdNow, begin, show, bring, ...stood, clear };
 });

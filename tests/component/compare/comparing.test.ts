@@ -294,7 +294,7 @@ describe('the comparison in words and figures', () => {
         sides,
         comparison: compareVoicings(sides.held.analysis, sides.now.analysis),
         figures: [{ name: 'Spread', held: '3 semitones', now: '12 semitones' }],
-        ...{ naming: 'english', backLabel: null, before: false },
+        ...{ naming: 'english', backLabel: null, before: false, asked: false },
       },
       global: { stubs },
     });
